@@ -1,0 +1,167 @@
+package fringekeep.archive;
+
+import fringekeep.archive.graph.Graph;
+import fringekeep.archive.kind.Inputs;
+import fringekeep.archive.kind.RecordView;
+import fringekeep.archive.listing.Listing;
+import fringekeep.archive.listing.Page;
+import fringekeep.archive.problem.Problem;
+import fringekeep.archive.problem.ProblemException;
+import fringekeep.archive.problem.StoppedException;
+import fringekeep.archive.problem.Work;
+import fringekeep.archive.record.Hash;
+import fringekeep.archive.record.PersonId;
+import java.io.InputStream;
+import java.nio.file.Path;
+import java.time.Instant;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+
+/**
+ * One lab's store, open in this process. Thread-safe: one writer thread inside, readers see a committed watermark and never
+ * wait for the writer.
+ */
+public interface Archive extends AutoCloseable {
+    /** Id, title, day boundary, zone, whether invented, and the watermark now. */
+    ArchiveFacts facts();
+
+    /** The kinds this program knows. */
+    Kinds kinds();
+
+    // ---- reading
+
+    /** A record at hand. */
+    Optional<RecordView> record(Hash fingerprint);
+
+    /** What a record was made from and speaks of. */
+    Inputs inputs(Hash fingerprint);
+
+    /**
+     * Finds a record by what people write: {@code scan 412}, {@code scan 0412 b}, a short form or 64 hexadecimal digits. A
+     * number means the current record of the thing.
+     *
+     * @throws ProblemException if nothing or more than one thing answers; the candidates are named
+     */
+    Hash find(String reference) throws ProblemException;
+
+    /** What people call a record: {@code scan 0412}, {@code scan 0412 b} for its first correction. */
+    String label(Hash fingerprint);
+
+    /** Journal entry that recorded or received it, and when. */
+    Optional<Recorded> recorded(Hash fingerprint);
+
+    /** Records of a kind in journal order, from an entry on. */
+    List<Hash> records(String kind, long fromEntry, int limit);
+
+    /** How many current records each kind has. */
+    Map<String, Long> counts();
+
+    /** A page of a projection. */
+    Page list(Listing listing) throws ProblemException;
+
+    /** States and links at the present watermark. */
+    Graph graph();
+
+    /** Entries n = from … in order, as their exact bytes. */
+    List<byte[]> journal(long from, int limit);
+
+    /** Hash of the last committed entry. */
+    Hash journalHead();
+
+    /** Bytes of a raw file. */
+    Optional<InputStream> raw(Hash raw) throws ProblemException;
+
+    /** Exact stored bytes of a head or part by hash. */
+    Optional<byte[]> stored(Hash hash);
+
+    // ---- writing
+
+    /**
+     * Examines new records and works out heads, parts and fingerprints, drawing ids and salts; stores nothing. Later ones may
+     * refer to earlier ones of the same list by fingerprint, so callers that need one prepare one by one and pass all to
+     * {@link #record}.
+     *
+     * @param earlier prepared records that this one may refer to
+     * @throws ProblemException all that is wrong, each with its JSON pointer
+     */
+    Prepared prepare(NewRecord record, List<Prepared> earlier) throws ProblemException;
+
+    /** Records all in one transaction (at most 100); returns after the commit. */
+    List<Recorded> record(List<Prepared> records) throws ProblemException;
+
+    /** Prepares and records one. */
+    default Recorded record(NewRecord record) throws ProblemException {
+        return record(List.of(prepare(record, List.of()))).get(0);
+    }
+
+    /**
+     * Completes choices, computes, and returns what is to be recorded.
+     *
+     * @param request a new record with choices (possibly incomplete) and inputs, without result
+     */
+    NewRecord compute(NewRecord request, List<Prepared> earlier, Work work) throws ProblemException, StoppedException;
+
+    /** Takes a raw file in (copy, fsync, rename); known bytes are recognised. */
+    RawTaken takeIn(Path file) throws ProblemException;
+
+    /** Takes raw bytes in. */
+    RawTaken takeIn(byte[] bytes) throws ProblemException;
+
+    /** Persons by id. */
+    List<Person> persons();
+
+    /** Adds or changes a person. */
+    void savePerson(Person person) throws ProblemException;
+
+    /** Forgets a person; the id stays in salted parts, what it stood for is gone. */
+    void erasePerson(PersonId person) throws ProblemException;
+
+    /** Changes title, day boundary or zone from now on. */
+    void settings(String title, String dayBoundary, String zone) throws ProblemException;
+
+    /** Purges a raw file, a payload or a salted part for cause. */
+    void purge(PurgeTarget target, Hash hash, String reason, String text) throws ProblemException;
+
+    /** Drafts of entry forms. */
+    Drafts drafts();
+
+    // ---- care
+
+    /** Re-hashes everything, follows the journal, compares projections, finds orphans; names each fault. */
+    List<Problem> check(Work work) throws StoppedException, ProblemException;
+
+    /** Rebuilds all projections. */
+    void rebuildProjections(Work work) throws StoppedException, ProblemException;
+
+    /** Copies the archive out as plain files while it is in use; a second copy into the same folder adds. */
+    void copyTo(Path folder, Work work) throws StoppedException, ProblemException;
+
+    /** Receives records from a plain copy or a bundle's folder; known ones are skipped. */
+    Received receive(Path folder, boolean withPersons, Work work) throws StoppedException, ProblemException;
+
+    /** Calls a listener after each commit, on the writer thread, with the new watermark. */
+    AutoCloseable onCommit(java.util.function.LongConsumer listener);
+
+    @Override
+    void close();
+
+    /** What was recorded. */
+    record Recorded(Hash fingerprint, long n, String label, Instant at) {}
+
+    /** A raw file taken in. */
+    record RawTaken(Hash hash, long bytes, boolean known) {}
+
+    /** What can be purged. */
+    enum PurgeTarget {
+        /** A raw file. */
+        RAW,
+        /** A payload. */
+        PAYLOAD,
+        /** A salted part. */
+        PART
+    }
+
+    /** How many records came, were known already, and parts supplied. */
+    record Received(long records, long known, long parts) {}
+}

@@ -1,0 +1,3 @@
+/** Heads, parts, ids and fingerprints as record format 1 has them. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.archive.record;

@@ -1,0 +1,3 @@
+/** Export, check and read back of a dataset bundle. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.bundle;

@@ -1,0 +1,3 @@
+/** The headless program. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.commandline;

@@ -1,0 +1,3 @@
+/** The measurement day; watching a folder. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.daysheet;

@@ -1,0 +1,3 @@
+/** Figures and statements as printed. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.figure;

@@ -1,0 +1,3 @@
+/** Fringe fits of one or many scans. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.fit;

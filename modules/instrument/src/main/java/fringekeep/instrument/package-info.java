@@ -1,0 +1,3 @@
+/** Setup, calibration and monitor log. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.instrument;

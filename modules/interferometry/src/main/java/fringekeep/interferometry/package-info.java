@@ -1,0 +1,3 @@
+/** Physics and statistics: pure functions on numbers. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.interferometry;

@@ -1,0 +1,3 @@
+/** Selection, property and quoted values. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.property;

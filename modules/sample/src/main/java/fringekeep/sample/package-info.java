@@ -1,0 +1,3 @@
+/** Compound and batch. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.sample;

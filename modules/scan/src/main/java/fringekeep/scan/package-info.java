@@ -1,0 +1,3 @@
+/** Reading profile, scan, series and placement. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.scan;

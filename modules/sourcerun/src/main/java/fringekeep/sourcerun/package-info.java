@@ -1,0 +1,3 @@
+/** Source run and velocity. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.sourcerun;
