@@ -2,6 +2,7 @@ package fringekeep.archive;
 
 import fringekeep.archive.graph.Graph;
 import fringekeep.archive.kind.Inputs;
+import fringekeep.archive.kind.Kinds;
 import fringekeep.archive.kind.RecordView;
 import fringekeep.archive.listing.Listing;
 import fringekeep.archive.listing.Page;

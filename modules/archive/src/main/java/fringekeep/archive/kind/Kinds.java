@@ -1,6 +1,5 @@
-package fringekeep.archive;
+package fringekeep.archive.kind;
 
-import fringekeep.archive.kind.RecordKind;
 import fringekeep.archive.record.KindName;
 import java.util.Collection;
 import java.util.Collections;
