@@ -1,6 +1,6 @@
 package fringekeep.drawing;
 
-/** Colour by meaning; a the theme turns it into a colour for paper, a light or a dark screen. */
+/** Colour by meaning; the theme turns it into a colour for paper, a light or a dark screen. */
 public enum Tone {
     /** Measured points, axes, words. */
     INK,
