@@ -1,0 +1,3 @@
+/** Tests of the fringe fits. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.interferometry.fringe;
