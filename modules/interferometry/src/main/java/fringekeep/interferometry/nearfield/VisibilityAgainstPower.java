@@ -1,0 +1,329 @@
+package fringekeep.interferometry.nearfield;
+
+import fringekeep.interferometry.special.Bessel;
+import fringekeep.interferometry.special.CosineSineKernel;
+import fringekeep.interferometry.special.HalfTurn;
+import fringekeep.interferometry.special.PiecewisePolynomial;
+import java.util.Optional;
+
+/**
+ * Visibility of a slit - light - slit interferometer as a function of laser power, averaged over speed, mass and height:
+ * V(P) = 2 |&Sigma; W_q B_n2(c_q &alpha;'P, z_q &sigma;P)|, the signed amplitude being averaged and the modulus taken last.
+ *
+ * <p>Everything but &alpha;'P and &sigma;P is fixed at construction: W_q holds the outer gratings and the weights of the
+ * ensemble, normalised by the mean transmission. Derivatives are analytic. Without absorption V depends on the one
+ * number &alpha;'P alone and can be tabulated ({@link #tabulated}); the table agrees with the sum to 1e-14.
+ *
+ * <p>A small negative cross section is accepted, so that a fit may fall on either side of zero.
+ *
+ * <p>Thread rule: immutable. Cost: about 10 ns per node without, 60 ns with absorption; about 10 ns in all with the table.
+ */
+public final class VisibilityAgainstPower {
+    private static final double CELL = 0.5;
+    private static final double LARGEST_TABLE_WORK = 3e7;
+
+    private final int order;
+    private final double recoilSign;
+    private final double[] weights;
+    private final double[] odd;
+    private final double[] even;
+    private final double largestOdd;
+    private final boolean reflectionIsPerfect;
+    private final Optional<PiecewisePolynomial> table;
+
+    /**
+     * Fixes the set-up, the beam and the description.
+     *
+     * @param setup       gratings, distances, laser
+     * @param ensemble    speeds (weighted as the detector does), masses, heights
+     * @param description quantum or classical
+     */
+    public VisibilityAgainstPower(PowerSeriesSetup setup, BeamEnsemble ensemble, Description description) {
+        Nodes nodes = new Nodes(setup, ensemble, description);
+        this.order = setup.geometry().harmonic2();
+        this.recoilSign = setup.laser().recoil().sign();
+        this.weights = nodes.weights;
+        this.odd = nodes.odd;
+        this.even = nodes.even;
+        this.largestOdd = nodes.largestOdd();
+        this.table = Optional.empty();
+        this.reflectionIsPerfect = setup.laser().reflectivity() == 1.0;
+    }
+
+    private VisibilityAgainstPower(VisibilityAgainstPower model, PiecewisePolynomial table) {
+        this.order = model.order;
+        this.recoilSign = model.recoilSign;
+        this.weights = model.weights;
+        this.odd = model.odd;
+        this.even = model.even;
+        this.largestOdd = model.largestOdd;
+        this.reflectionIsPerfect = model.reflectionIsPerfect;
+        this.table = Optional.of(table);
+    }
+
+    /**
+     * The same model with its absorption-free curve tabulated.
+     *
+     * @param largestProduct largest polarizability volume times power to be asked for (m^3 W); beyond it the sum is used
+     * @return a model that answers absorption-free questions from the table; this model itself if the table would cost
+     *     more than it saves (over 3e7 kernel values)
+     */
+    public VisibilityAgainstPower tabulated(double largestProduct) {
+        double cells = Math.ceil(largestProduct * largestOdd / CELL);
+        if (!(cells >= 1.0) || cells * 11.0 * weights.length > LARGEST_TABLE_WORK) {
+            return this;
+        }
+        return new VisibilityAgainstPower(
+                this, PiecewisePolynomial.of(x -> phaseOnly(x / largestOdd), 0.0, CELL, (int) cells));
+    }
+
+    /**
+     * Signed visibility and its derivatives at one power.
+     *
+     * @param signed           2 S_1/S_0; negative where the fringe is moved by half a period
+     * @param byPolarizability its derivative with respect to the polarizability volume (1/m^3)
+     * @param byCrossSection   its derivative with respect to the absorption cross section (1/m^2)
+     */
+    public record Point(double signed, double byPolarizability, double byCrossSection) {}
+
+    /**
+     * Visibility at one power.
+     *
+     * @param power    incident laser power (W), &ge; 0
+     * @param response polarizability and cross section
+     * @return |2 S_1/S_0|
+     */
+    public double visibility(double power, OpticalResponse response) {
+        return Math.abs(signedVisibility(power, response));
+    }
+
+    /**
+     * Signed visibility at one power.
+     *
+     * @param power    incident laser power (W), &ge; 0
+     * @param response polarizability and cross section
+     * @return 2 S_1/S_0
+     * @throws IllegalArgumentException if the power is negative, or absorption is asked for behind an imperfect mirror
+     */
+    public double signedVisibility(double power, OpticalResponse response) {
+        double product = requirePower(power) * response.polarizabilityVolume();
+        if (response.crossSection() == 0.0) {
+            return fastPhaseOnly(product);
+        }
+        double absorbed = absorbed(power, response);
+        double sum = 0.0;
+        for (int q = 0; q < weights.length; q++) {
+            double z = even[q] * absorbed;
+            double value = CosineSineKernel.coefficient(order, recoilSign * z, odd[q] * product, -z);
+            sum = Math.fma(weights[q], value, sum);
+        }
+        return sum;
+    }
+
+    /**
+     * Signed visibility with analytic derivatives.
+     *
+     * @param power    incident laser power (W), &ge; 0
+     * @param response polarizability and cross section
+     * @return value and derivatives; the derivative by the cross section is given at zero absorption too
+     */
+    public Point point(double power, OpticalResponse response) {
+        double product = requirePower(power) * response.polarizabilityVolume();
+        double absorbed = absorbed(power, response);
+        double signed = 0.0;
+        double byOdd = 0.0;
+        double byEven = 0.0;
+        for (int q = 0; q < weights.length; q++) {
+            double z = even[q] * absorbed;
+            double a = recoilSign * z;
+            double c = odd[q] * product;
+            double lower = CosineSineKernel.coefficient(order - 1, a, c, -z);
+            double here = CosineSineKernel.coefficient(order, a, c, -z);
+            double upper = CosineSineKernel.coefficient(order + 1, a, c, -z);
+            signed = Math.fma(weights[q], here, signed);
+            byOdd = Math.fma(weights[q] * odd[q], 0.5 * (lower - upper), byOdd);
+            byEven = Math.fma(weights[q] * even[q], recoilSign * 0.5 * (lower + upper) - here, byEven);
+        }
+        return new Point(signed, power * byOdd, power * byEven);
+    }
+
+    /**
+     * Signed visibility without absorption and its derivative by the polarizability, from the table where there is one.
+     *
+     * @param power                incident laser power (W), &ge; 0
+     * @param polarizabilityVolume polarizability volume (m^3)
+     * @return value and derivative; the derivative by the cross section is not computed and given as zero
+     */
+    public Point phaseOnlyPoint(double power, double polarizabilityVolume) {
+        double product = requirePower(power) * polarizabilityVolume;
+        double argument = Math.abs(product) * largestOdd;
+        if (table.isPresent() && argument <= table.get().end()) {
+            double parity = order % 2 != 0 && product < 0.0 ? -1.0 : 1.0;
+            double slope = table.get().derivative(argument) * largestOdd * Math.signum(product == 0.0 ? 1.0 : product);
+            return new Point(parity * table.get().value(argument), parity * power * slope, 0.0);
+        }
+        double slope = 0.0;
+        for (int q = 0; q < weights.length; q++) {
+            double c = odd[q] * product;
+            slope = Math.fma(weights[q] * odd[q], 0.5 * (Bessel.j(order - 1, c) - Bessel.j(order + 1, c)), slope);
+        }
+        return new Point(phaseOnly(product), power * slope, 0.0);
+    }
+
+    /**
+     * Mean argument of the grating kernel per polarizability volume and power, the natural unit of a search.
+     *
+     * @return &Sigma; |W_q c_q| / &Sigma; |W_q| (1/(m^3 W))
+     */
+    public double meanArgumentFactor() {
+        double sum = 0.0;
+        double total = 0.0;
+        for (int q = 0; q < weights.length; q++) {
+            sum += Math.abs(weights[q] * odd[q]);
+            total += Math.abs(weights[q]);
+        }
+        return sum / total;
+    }
+
+    /**
+     * Mean absorption exponent per cross section and power.
+     *
+     * @return &Sigma; |W_q z_q| / &Sigma; |W_q| (1/(m^2 W)), zero if absorption leaves no trace at this Talbot parameter
+     */
+    public double meanAbsorptionFactor() {
+        double sum = 0.0;
+        double total = 0.0;
+        for (int q = 0; q < weights.length; q++) {
+            sum += Math.abs(weights[q]) * even[q];
+            total += Math.abs(weights[q]);
+        }
+        return sum / total;
+    }
+
+    private double fastPhaseOnly(double product) {
+        double argument = Math.abs(product) * largestOdd;
+        if (table.isEmpty() || argument > table.get().end()) {
+            return phaseOnly(product);
+        }
+        double value = table.get().value(argument);
+        return order % 2 != 0 && product < 0.0 ? -value : value;
+    }
+
+    private double phaseOnly(double product) {
+        double sum = 0.0;
+        for (int q = 0; q < weights.length; q++) {
+            sum = Math.fma(weights[q], Bessel.j(order, odd[q] * product), sum);
+        }
+        return sum;
+    }
+
+    private double absorbed(double power, OpticalResponse response) {
+        if (response.crossSection() != 0.0 && !reflectionIsPerfect) {
+            throw new IllegalArgumentException("recoil from absorption is described for a perfect mirror only; set the"
+                    + " reflectivity to 1 or the cross section to 0");
+        }
+        return power * response.crossSection();
+    }
+
+    private static double requirePower(double power) {
+        if (!(power >= 0.0 && power < Double.POSITIVE_INFINITY)) {
+            throw new IllegalArgumentException("the laser power is at least 0 W, not " + power);
+        }
+        return power;
+    }
+
+    /** Every class of molecules of the ensemble, flattened. */
+    private static final class Nodes {
+        final double[] weights;
+        final double[] odd;
+        final double[] even;
+        private final PowerSeriesSetup setup;
+        private final Description description;
+        private final ThreeGratingFringe train;
+        private double transmission;
+
+        Nodes(PowerSeriesSetup setup, BeamEnsemble ensemble, Description description) {
+            this.setup = setup;
+            this.description = description;
+            this.train = new ThreeGratingFringe(setup.geometry(), description, 1);
+            int heights = ensemble.heights().size();
+            int masses = ensemble.masses().size();
+            int count = ensemble.velocities().size() * masses * heights;
+            weights = new double[count];
+            odd = new double[count];
+            even = new double[count];
+            for (int i = 0; i < ensemble.velocities().size(); i++) {
+                double velocity = ensemble.velocities().value(i);
+                TalbotKernel first = setup.first().at(velocity);
+                TalbotKernel third = setup.third().at(velocity);
+                transmission += ensemble.velocities().weight(i) * first.transmission() * third.transmission();
+                for (int j = 0; j < masses; j++) {
+                    double weight =
+                            ensemble.velocities().weight(i) * ensemble.masses().weight(j);
+                    fill(
+                            (i * masses + j) * heights,
+                            ensemble,
+                            weight,
+                            new Species(velocity, ensemble.masses().value(j), first, third));
+                }
+            }
+            for (int q = 0; q < count; q++) {
+                weights[q] *= 2.0 / transmission;
+            }
+        }
+
+        private record Species(double velocity, double mass, TalbotKernel first, TalbotKernel third) {}
+
+        private void fill(int at, BeamEnsemble ensemble, double weight, Species one) {
+            Passage passage = new Passage(
+                    setup.separation1() / one.velocity,
+                    setup.separation2() / one.velocity,
+                    one.mass,
+                    setup.divergence() * one.velocity);
+            double outer = outerAmplitude(passage, one);
+            double xi = train.secondSeparation(1, passage) / setup.geometry().period2();
+            boolean quantum = description == Description.QUANTUM;
+            double sine = quantum ? HalfTurn.sin(xi) : Math.PI * xi;
+            double half = quantum ? HalfTurn.sin(0.5 * xi) : 0.5 * Math.PI * xi;
+            LaserBeam laser = setup.laser();
+            double phase = LightStrength.beamPhase(1.0, 1.0, laser.waist(), one.velocity)
+                    * LightStrength.modulation(laser.reflectivity());
+            double photons = LightStrength.beamPhotons(1.0, laser.wavelength(), 1.0, laser.waist(), one.velocity);
+            for (int k = 0; k < ensemble.heights().size(); k++) {
+                double profile = LightStrength.profile(ensemble.heights().value(k), laser.waist());
+                weights[at + k] = weight * ensemble.heights().weight(k) * outer;
+                odd[at + k] = phase * profile * sine;
+                even[at + k] = photons * profile * half * half;
+            }
+        }
+
+        /** Product of the outer gratings' amplitudes and the source coherence, the light grating set aside. */
+        private double outerAmplitude(Passage passage, Species one) {
+            return train.series(one.first, TransparentKernel.INSTANCE, one.third, passage)
+                    .coefficient(1);
+        }
+
+        double largestOdd() {
+            double largest = 0.0;
+            for (double value : odd) {
+                largest = Math.max(largest, Math.abs(value));
+            }
+            return largest;
+        }
+    }
+
+    /** Stands in for the light grating where only the outer gratings' factor is wanted. */
+    private enum TransparentKernel implements TalbotKernel {
+        INSTANCE;
+
+        @Override
+        public double quantum(int n, double xi) {
+            return 1.0;
+        }
+
+        @Override
+        public double classical(int n, double xi) {
+            return 1.0;
+        }
+    }
+}
