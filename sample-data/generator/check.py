@@ -3,6 +3,7 @@
 import sys
 from pathlib import Path
 
+import documents
 from generate import SEED, whole_lab
 
 
@@ -11,12 +12,20 @@ def main():
     files, truth = whole_lab(SEED)
     wanted = {f"raw/{name}": content for name, content in files.items()}
     wanted["truth.json"] = truth.encode("utf-8")
+    wanted["lab/lab.json"] = documents.main().encode("utf-8")
     kept = {str(path.relative_to(folder)): path.read_bytes() for path in (folder / "raw").rglob("*") if path.is_file()}
-    kept["truth.json"] = (folder / "truth.json").read_bytes()
-    faults = [f"{name}: {'missing' if name not in kept else 'not made by the generator' if name not in wanted else 'differs'}"
+    for name in ("truth.json", "lab/lab.json"):
+        kept[name] = (folder / name).read_bytes()
+    faults = [f"{name}: {fault(name, wanted, kept)}"
               for name in sorted(wanted.keys() | kept.keys()) if wanted.get(name) != kept.get(name)]
     print("\n".join(faults) if faults else f"{len(wanted)} files, all the same bytes")
     return 1 if faults else 0
+
+
+def fault(name, wanted, kept):
+    if name not in kept:
+        return "missing"
+    return "differs" if name in wanted else "not made by the generator"
 
 
 if __name__ == "__main__":

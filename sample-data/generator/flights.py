@@ -12,7 +12,7 @@ SLOT, TIME_ZERO = 0.40e-3, 0.350e-3
 ELEMENT, ORDER, TAPS = 0.25e-3, 8, (8, 6, 5, 4)      # 255 elements a turn
 FINE = 20                            # parts of a bin
 SINGLE_COUNTS, SINGLE_DARK = 12000, 3.0
-RANDOM_COUNTS, RANDOM_DARK = 60000, 40.0
+RANDOM_COUNTS, RANDOM_DARK = 24_000_000, 3000.0
 
 
 def sequence():
