@@ -1,0 +1,3 @@
+/** What only this module's kinds and verbs use. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.scan.internal;
