@@ -9,7 +9,7 @@ from pathlib import Path
 
 import flights
 from generate import OPERATORS
-from plan import CLUSTER_POWERS, ENERGIES, FAN_POWERS, SPACING, VANE_POWERS, days, local
+from plan import CLUSTER_POWERS, ENERGIES, FAN_POWERS, SPACING, VANE_POWERS, days, local, shown_twice
 
 VIREEN, QUILLOW, LINDMOOR = "Ottla Vireen", "Bram Quillow", "Sefa Lindmoor"
 ZONE = "CET"
@@ -144,11 +144,11 @@ def reading(script):
     script.record({"kind": "reading-profile", "content": {
         "label": "short bench, tab", "form": "delimited/1", "encoding": "UTF-8", "delimiter": "\t", "decimal": ".",
         "comment": "#", "skip": 1, "keySeparator": ":", "direction": "up",
-        "columns": [{"axis": "position", "unit": "nm", "header": "position_nm", "positions": "set", "from": 0,
-                     "to": 5000}, {"channel": "counts", "number": 2, "saturation": 4095}],
+        "columns": [{"axis": "position", "unit": "nm", "header": "position_nm", "positions": "set"},
+                    {"channel": "counts", "number": 2, "saturation": 4095}],
         "header": [{"key": "start", "moment": "start", "required": True}, {"key": "end", "moment": "end"},
                    {"key": "points", "rows": True}, {"key": "dwell", "exposure": True, "unit": "s", "required": True},
-                   {"key": "laser power", "setting": "laser power", "unit": "W"},
+                   {"key": "laser power", "setting": "laser power", "unit": "W", "deviation": "0.001"},
                    {"key": "operator", "personal": True}]}})
     script.record({"kind": "reading-profile", "content": {
         "label": "long bench, semicolon", "form": "delimited/1", "encoding": "ISO-8859-1", "delimiter": ";",
@@ -161,7 +161,8 @@ def reading(script):
                     "required": True},
                    {"key": "Punkte", "rows": True},
                    {"key": "Messzeit / s", "exposure": True, "unit": "s", "required": True},
-                   {"key": "Laserleistung / W", "setting": "laser power", "unit": "W"},
+                   {"key": "Laserleistung / W", "setting": "laser power", "unit": "W",
+                    "deviation": "0.001"},
                    {"key": "Quelle / °C", "setting": "source temperature", "unit": "Cel"}],
         "note": "The clock is the wall clock and changes with summer time."}})
     script.record({"kind": "reading-profile", "content": {
@@ -283,6 +284,11 @@ def fits(script, day, beam):
             if section.purpose in ("signal", "reference", "laser-off") and not file.group
             and section.mishap not in WITHDRAWN and section.mishap != "drift"]
     pinned = {"background": background} if choices["background"]["sort"] == "scan" else {}
+    if beam == "cluster, day 4":
+        signals, around = between_references(files)
+        script.step("fit", each=signals, references=around, channel=channel,
+                    choices={**choices, "references": "normalised"})
+        each = [one for one in each if one not in signals]
     script.step("fit", each=each, channel=channel, choices=choices, **pinned)
     drifting = [scan(file.name) for file in files if file.sections[0].mishap == "drift"]
     if drifting:
@@ -291,6 +297,14 @@ def fits(script, day, beam):
         together = [scan(file.name) for file in files if file.group == group]
         combine = "joint" if group == "weak, day 4" else "sum"
         script.step("fit", together=together, channel=channel, choices={**choices, "combine": combine}, **pinned)
+
+
+def between_references(files):
+    """Signals of the series, and for each the reference before and the one after it."""
+    series_files = [file for file in files if file.series]
+    places = [place for place, file in enumerate(series_files) if file.sections[0].purpose == "signal"]
+    return ([scan(series_files[place].name) for place in places],
+            [[scan(series_files[place - 1].name), scan(series_files[place + 1].name)] for place in places])
 
 
 def background_of(file):
@@ -337,9 +351,22 @@ def judge(script, day):
                            "remark": words})
 
 
+def clock_change(script, day):
+    """Scans the wall clock shows for the second time are read anew with the begin entered by hand."""
+    twice = [file for file in day.files if file.bench == "long" and shown_twice(file.start)]
+    if twice:
+        script.record(*[{"kind": "scan", "corrects": scan(file.name), "remark": "Taken after the clock was put back.",
+                         "inputs": [{"role": "raw", "raw": file.name},
+                                    {"role": "profile", "record": PROFILES["long"]}],
+                         "choices": {"method": "scan.read/1", "constants": "CODATA 2018", "section": 0,
+                                     "file": {"name": file.name.split("/")[1]}, "start": moment(file.start)}}
+                        for file in twice])
+
+
 def night(script, day, offset, known_series):
     end = day.files[-1].start + timedelta(seconds=SPACING[day.files[-1].bench] * len(day.files[-1].sections))
     take_in(script, day)
+    clock_change(script, day)
     judge(script, day)
     for beam in dict.fromkeys(file.beam for file in day.files):
         files = [file for file in day.files if file.beam == beam]

@@ -9,7 +9,7 @@ Needs Python 3.11 and Debian's python3-numpy (1.24). The same seed gives the sam
 import argparse
 import json
 import math
-from datetime import timedelta
+from datetime import datetime, timedelta
 from pathlib import Path
 
 import numpy as np
@@ -19,7 +19,7 @@ import dialects
 import fringes
 import flights
 import lab
-from plan import SPACING, SUMMER, days, local
+from plan import SPACING, SUMMER, days, local, shown_twice
 
 SEED = 20311014
 OPERATORS = {1: "Ottla Vireen", 2: "Bram Quillow", 3: "Ottla Vireen", 4: "Sefa Lindmoor"}
@@ -180,11 +180,23 @@ def truth_text(seed, scans, velocities):
                               {"what": "energy meter", "days": [2], "factor": lab.ENERGY_FACTOR}],
              "clockOffsets": [{"day": day, "seconds": seconds} for day, seconds in CLOCK_OFFSET.items()],
              "typedWrong": {"bench": "short", "separation": lab.SHORT_TYPED_SEPARATION, "true": lab.SHORT.separation},
-             "flightDistance": flights.DISTANCE}
+             "flightDistance": flights.DISTANCE, "mishaps": mishaps(scans)}
     text = json.dumps(parts, indent=1, ensure_ascii=False)[:-2]
     for name, rows in (("velocities", velocities), ("scans", scans)):
         text += f',\n "{name}": [\n  ' + ",\n  ".join(json.dumps(row) for row in rows) + "\n ]"
     return text + "\n}\n"
+
+
+def mishaps(scans):
+    """What went wrong, with the files in which it shows."""
+    found = {}
+    for truth in scans:
+        if "mishap" in truth:
+            found.setdefault(truth["mishap"], []).append(truth["file"])
+    found["clock change: wall clock shows the hour for the second time"] = [
+        truth["file"] for truth in scans
+        if truth["bench"] == "long" and shown_twice(datetime.fromisoformat(truth["start"]))]
+    return [{"what": what, "files": names} for what, names in found.items()]
 
 
 def one_known_value():

@@ -147,6 +147,11 @@ def replace_times(day):
 SPACING = {"short": 353, "long": 411, "pulsed": 287}
 
 
+def shown_twice(moment):
+    """Whether the wall clock shows this moment for the second time, an hour after the first."""
+    return CHANGE <= moment < CHANGE + timedelta(hours=1)
+
+
 def local(moment):
     """The lab's wall clock, with summer time until the night of day 4."""
     return moment.astimezone(SUMMER if moment < CHANGE else WINTER)
