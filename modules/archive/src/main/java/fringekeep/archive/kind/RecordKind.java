@@ -7,6 +7,7 @@ import fringekeep.archive.problem.Problem;
 import fringekeep.archive.record.KindName;
 import fringekeep.archive.record.PartName;
 import fringekeep.drawing.Picture;
+import java.time.Instant;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
@@ -56,6 +57,14 @@ public interface RecordKind {
 
     /** All that is wrong with a record beyond its schema and its roles; {@code where} is a JSON pointer into the parts. */
     List<Problem> examine(Parts parts, Inputs inputs);
+
+    /**
+     * What is wrong with a record as the one that holds from an instant on (a calibration is valid from that very instant);
+     * {@code where} is a JSON pointer into the parts.
+     */
+    default List<Problem> examineContinuation(Parts parts, Instant from) {
+        return List.of();
+    }
 
     /** How results are computed; absent for what people enter. */
     default Optional<Computation> computation() {

@@ -1,0 +1,146 @@
+package fringekeep.archive.internal.records;
+
+import fringekeep.archive.json.Json;
+import fringekeep.archive.json.JsonArray;
+import fringekeep.archive.json.JsonObject;
+import fringekeep.archive.json.JsonPointer;
+import fringekeep.archive.json.JsonText;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
+
+/**
+ * Walks a value along its schema and finds the places where the schema asks for a quantity. Branches of a choice that the
+ * value contradicts by a constant are left aside.
+ */
+public final class SchemaWalk {
+    private static final String QUANTITY = "common-1.schema.json#/$defs/quantity";
+    private static final int DEEPEST = 100;
+    private final JsonObject root;
+    private final Map<String, QuantityPlace> places = new LinkedHashMap<>();
+
+    private SchemaWalk(JsonObject root) {
+        this.root = root;
+    }
+
+    /** The places in a value where the schema asks for a quantity, whatever stands there. */
+    public static List<QuantityPlace> quantities(JsonObject schema, Json value) {
+        SchemaWalk walk = new SchemaWalk(schema);
+        walk.visit(schema, value, "", 0);
+        return List.copyOf(walk.places.values());
+    }
+
+    private void visit(JsonObject schema, Json value, String pointer, int depth) {
+        if (depth > DEEPEST) {
+            return;
+        }
+        Optional<String> reference = schema.text("$ref");
+        if (reference.isPresent() && reference.get().endsWith(QUANTITY)) {
+            places.merge(
+                    pointer,
+                    QuantityPlace.of(schema, pointer),
+                    (a, b) -> a.siUnit().isPresent() ? a : b);
+        } else {
+            reference.flatMap(this::local).ifPresent(target -> visit(target, value, pointer, depth + 1));
+        }
+        if (value instanceof JsonObject object) {
+            members(schema, object, pointer, depth);
+        } else if (value instanceof JsonArray array) {
+            items(schema, array, pointer, depth);
+        }
+        for (JsonObject branch : branches(schema)) {
+            if (!contradicts(branch, value)) {
+                visit(branch, value, pointer, depth + 1);
+            }
+        }
+    }
+
+    private Optional<JsonObject> local(String reference) {
+        return reference.startsWith("#")
+                ? JsonPointer.resolve(root, reference.substring(1))
+                        .filter(JsonObject.class::isInstance)
+                        .map(JsonObject.class::cast)
+                : Optional.empty();
+    }
+
+    private void members(JsonObject schema, JsonObject value, String pointer, int depth) {
+        JsonObject properties = schema.object("properties").orElse(JsonObject.EMPTY);
+        value.members()
+                .forEach((name, member) -> properties
+                        .object(name)
+                        .ifPresent(below -> visit(below, member, JsonPointer.child(pointer, name), depth + 1)));
+    }
+
+    private void items(JsonObject schema, JsonArray value, String pointer, int depth) {
+        List<Json> first = schema.array("prefixItems").items();
+        for (int i = 0; i < value.items().size(); i++) {
+            Optional<JsonObject> below = i < first.size()
+                    ? Optional.of(first.get(i))
+                            .filter(JsonObject.class::isInstance)
+                            .map(JsonObject.class::cast)
+                    : schema.object("items");
+            String here = JsonPointer.child(pointer, i);
+            Json item = value.items().get(i);
+            below.ifPresent(found -> visit(found, item, here, depth + 1));
+        }
+    }
+
+    private static List<JsonObject> branches(JsonObject schema) {
+        List<JsonObject> branches = new ArrayList<>();
+        for (String word : List.of("allOf", "anyOf", "oneOf")) {
+            schema.array(word).items().stream()
+                    .filter(JsonObject.class::isInstance)
+                    .map(JsonObject.class::cast)
+                    .forEach(branches::add);
+        }
+        schema.object("then").ifPresent(branches::add);
+        schema.object("else").ifPresent(branches::add);
+        return branches;
+    }
+
+    private boolean contradicts(JsonObject branch, Json value) {
+        if (branch.text("$ref")
+                .flatMap(this::local)
+                .filter(target -> contradicts(target, value))
+                .isPresent()) {
+            return true;
+        }
+        if (!(value instanceof JsonObject object)) {
+            return false;
+        }
+        JsonObject properties = branch.object("properties").orElse(JsonObject.EMPTY);
+        return object.members().entrySet().stream()
+                .anyMatch(member -> properties
+                        .object(member.getKey())
+                        .filter(rule -> forbids(rule, member.getValue()))
+                        .isPresent());
+    }
+
+    private static boolean forbids(JsonObject rule, Json value) {
+        if (!(value instanceof JsonText)) {
+            return false;
+        }
+        List<Json> allowed =
+                rule.get("const").map(List::of).orElse(rule.array("enum").items());
+        return !allowed.isEmpty() && !allowed.contains(value);
+    }
+
+    /**
+     * A place where a quantity is asked for.
+     *
+     * @param pointer into the value
+     * @param siUnit unit it must reduce to; empty = any
+     * @param usualFrom lower end of what is usual (SI)
+     * @param usualTo upper end of what is usual (SI)
+     */
+    public record QuantityPlace(
+            String pointer, Optional<String> siUnit, OptionalDouble usualFrom, OptionalDouble usualTo) {
+        static QuantityPlace of(JsonObject schema, String pointer) {
+            JsonObject usual = schema.object("usual").orElse(JsonObject.EMPTY);
+            return new QuantityPlace(pointer, schema.text("siUnit"), usual.number("from"), usual.number("to"));
+        }
+    }
+}
