@@ -6,7 +6,7 @@ package fringekeep.interferometry.fringe;
  * @param reason stable reason
  * @param words what happened and what could mend it
  */
-public record FringeFailure(Reason reason, String words) implements FringeOutcome {
+public record FringeFailure(Reason reason, String words) implements FringeOutcome, SumOutcome, JointOutcome {
     /** The reasons. */
     public enum Reason {
         /** Fewer points left than parameters. */
@@ -21,6 +21,8 @@ public record FringeFailure(Reason reason, String words) implements FringeOutcom
         SATURATED,
         /** No minimum found. */
         NO_CONVERGENCE,
+        /** The scans to combine do not belong to the same positions, dead time or unit of exposure. */
+        SCANS_DIFFER,
         /** The period left the range the scan can resolve. */
         PERIOD_LOST
     }

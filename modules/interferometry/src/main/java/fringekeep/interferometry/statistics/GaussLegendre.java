@@ -34,6 +34,35 @@ public final class GaussLegendre {
     private GaussLegendre() {}
 
     /**
+     * Number of nodes of a panel.
+     *
+     * @return 24
+     */
+    public static int order() {
+        return ORDER;
+    }
+
+    /**
+     * Nodes and weights of equal panels.
+     *
+     * @param low lower end
+     * @param high upper end
+     * @param panels number of panels
+     * @param nodes filled with panels &times; {@link #order} nodes, rising
+     * @param weights filled with their weights
+     */
+    public static void fill(double low, double high, int panels, double[] nodes, double[] weights) {
+        double half = 0.5 * (high - low) / panels;
+        for (int panel = 0; panel < panels; panel++) {
+            double middle = low + (2 * panel + 1) * half;
+            for (int i = 0; i < ORDER; i++) {
+                nodes[panel * ORDER + i] = middle + half * NODES[i];
+                weights[panel * ORDER + i] = half * WEIGHTS[i];
+            }
+        }
+    }
+
+    /**
      * The integral over one panel.
      *
      * @param f smooth function

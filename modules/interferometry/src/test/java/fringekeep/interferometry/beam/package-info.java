@@ -1,0 +1,3 @@
+/** Tests of the beams. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.interferometry.beam;
