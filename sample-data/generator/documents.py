@@ -30,6 +30,7 @@ class Script:
 
     def __init__(self, begin):
         self.now, self.person, self.steps, self.counters = begin, VIREEN, [], {}
+        self.judgements = {}                   # file: (name of the judgement, why a selection leaves it out)
 
     def at(self, moment, person):
         assert moment >= self.now, (moment, self.now)
@@ -43,12 +44,16 @@ class Script:
     def record(self, *documents):
         """Records; answers the name people use for the last one, such as 'setup 2'."""
         self.step("record", documents=list(documents))
-        for document in documents:
-            if "corrects" not in document and "after" not in document:
-                kind = document["kind"]
-                self.counters[kind] = self.counters.get(kind, 0) + 1
-                name = f"{kind} {self.counters[kind]}"
-        return name if "name" in locals() else None
+        return [self.named(document) for document in documents][-1]
+
+    def named(self, document):
+        """The name of a new thing; what corrects or comes after another keeps that one's."""
+        for link in ("corrects", "after"):
+            if link in document:
+                return document[link] if link == "corrects" else document[link]["record"]
+        kind = document["kind"]
+        self.counters[kind] = self.counters.get(kind, 0) + 1
+        return f"{kind} {self.counters[kind]}"
 
 
 def moment(instant):
@@ -339,16 +344,18 @@ def judge(script, day):
         target = {"role": "target", "record": scan(file.name), "reach": "record"}
         if mishap in WITHDRAWN:
             code, words = WITHDRAWN[mishap]
-            script.record({"kind": "judgement", "about": [target], "content": {"verdict": "withdrawn", "reason": code},
-                           "remark": words})
-        if mishap in MASKED:
+            content, left = {"verdict": "withdrawn", "reason": code}, "withdrawn"
+        elif mishap in MASKED:
             code, points, words = MASKED[mishap]
-            script.record({"kind": "judgement", "about": [target], "remark": words,
-                           "content": {"verdict": "masked", "reason": code, "channel": "counts", "points": points}})
-        if mishap in DOUBTED:
+            content = {"verdict": "masked", "reason": code, "channel": "counts", "points": points}
+            left = "by-hand"
+        elif mishap in DOUBTED:
             code, words = DOUBTED[mishap]
-            script.record({"kind": "judgement", "about": [target], "content": {"verdict": "doubted", "reason": code},
-                           "remark": words})
+            content, left = {"verdict": "doubted", "reason": code}, "drifting"
+        else:
+            continue
+        name = script.record({"kind": "judgement", "about": [target], "content": content, "remark": words})
+        script.judgements[file.name] = (name, left)
 
 
 def clock_change(script, day):
@@ -400,6 +407,7 @@ def main():
         script.at(end, OPERATORS[day.number])
         night(script, day, {1: 138, 2: 138, 3: 140, 4: 142}[day.number], known_series)
     again(script)
+    results(script, script.judgements)
     lab = {"title": "demo lab", "invented": True, "dayBoundary": "06:00", "zone": ZONE,
            "persons": [{"name": name} for name in (VIREEN, QUILLOW, LINDMOOR)],
            "founded": "2031-10-13T07:55:00Z", "rawFolder": "../raw", "steps": script.steps}
@@ -414,6 +422,46 @@ def again(script):
             background = [scan(file.name) for file in day.files if file.beam == files[0].beam and background_of(file)]
             script.step("fit", each=[scan(file.name) for file in files], again=True, channel="counts",
                         choices=fit_choices("short"), background=background)
+
+
+# ---------------------------------------------------------------- what was made of it
+
+POWER_SERIES = ("fan power, day 1", "fan power, day 3", "vane power, day 2", "cluster power, day 3",
+                "cluster power, day 4")
+
+
+def results(script, judgements):
+    """Selections of the fits that a property rests on, with what was left out and why."""
+    script.now += timedelta(hours=30)
+    for name in POWER_SERIES:
+        select(script, name, judgements)
+    script.record(
+        {"kind": "quoted", "about": [{"role": "compound", "record": "compound 1"}], "content": {
+            "what": "polarizability-volume", "of": "demo fan", "quantity": "431(22) Ao3", "how": "calculated",
+            "source": "Invented for the demo lab; no such calculation exists.", "conditions": "532 nm"}},
+        {"kind": "quoted", "about": [{"role": "compound", "record": "compound 2"}], "content": {
+            "what": "polarizability-volume", "of": "demo vane", "quantity": "176(12) Ao3", "how": "calculated",
+            "source": "Invented for the demo lab; no such calculation exists.", "conditions": "532 nm"}})
+
+
+def select(script, name, judgements):
+    files = [file for day in days() for file in day.files if file.series == name]
+    beam = files[0].beam
+    taken = [{"role": "taken", "record": fit(file.name)} for file in files]
+    spoilt = [file for day in days() for file in day.files
+              if file.beam == beam and file.sections[0].purpose == "reference" and file.name in judgements]
+    because = [{"role": "because", "record": judgements[file.name][0]} for file in spoilt]
+    left = [{"about": place, "reason": judgements[file.name][1], "because": len(taken) + place}
+            for place, file in enumerate(spoilt)]
+    script.record({"kind": "selection", "inputs": taken + because,
+                   "about": [{"role": "left-out", "record": scan(file.name)} for file in spoilt],
+                   "content": {"label": name, "conditions": [], "left": left,
+                               "rule": f"Signals and references of the series '{name}'; no scan that was withdrawn, "
+                                       "masked or doubted."}})
+
+
+def fit(name):
+    return f"fit of {name}"
 
 
 def text_of(lab):
