@@ -83,6 +83,19 @@ public final class WeightedNodes {
      * @return the distribution
      */
     public static WeightedNodes normal(double mean, double deviation, double lowest) {
+        return normal(mean, deviation, lowest, 30);
+    }
+
+    /**
+     * A normal distribution on a chosen number of panels, for phases that vary fast with the value.
+     *
+     * @param mean      mean
+     * @param deviation standard deviation, &ge; 0; zero gives a single node
+     * @param lowest    values below are cut off; the rest is normalised again
+     * @param panels    panels of 8 Gauss-Legendre nodes over six standard deviations to either side, &ge; 1
+     * @return the distribution
+     */
+    public static WeightedNodes normal(double mean, double deviation, double lowest, int panels) {
         if (deviation == 0.0) {
             return single(mean);
         }
@@ -90,7 +103,7 @@ public final class WeightedNodes {
                 v -> StrictMath.exp(-0.5 * (v - mean) * (v - mean) / (deviation * deviation)),
                 Math.max(lowest, mean - 6.0 * deviation),
                 mean + 6.0 * deviation,
-                30);
+                panels);
     }
 
     /**
