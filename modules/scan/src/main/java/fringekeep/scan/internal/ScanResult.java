@@ -5,6 +5,7 @@ import fringekeep.archive.json.JsonArray;
 import fringekeep.archive.json.JsonObject;
 import fringekeep.archive.json.JsonText;
 import fringekeep.archive.kind.NewPayload;
+import fringekeep.archive.kind.NpyPayload;
 import fringekeep.archive.kind.Outcome;
 import fringekeep.archive.quantity.QuantityJson;
 import fringekeep.archive.record.Moment;
@@ -34,7 +35,7 @@ public final class ScanResult {
                         array(reading.findings().stream().map(Finding::json).toList()))
                 .with("rows", reading.table().rows())
                 .with("table", TABLE);
-        if (!payload.form().equals(TablePayload.CSV)) {
+        if (payload.form().equals(NpyPayload.FORM)) {
             result = result.with(
                     "columns",
                     JsonArray.ofTexts(reading.table().columns().stream()

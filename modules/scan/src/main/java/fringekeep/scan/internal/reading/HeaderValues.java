@@ -33,4 +33,15 @@ public record HeaderValues(
         settings = List.copyOf(settings);
         personal = List.copyOf(personal);
     }
+
+    /** How many of the profile's header values were found. */
+    public int found() {
+        int single = 0;
+        single += start.isPresent() ? 1 : 0;
+        single += end.isPresent() ? 1 : 0;
+        single += exposure.isPresent() ? 1 : 0;
+        single += shots.isPresent() ? 1 : 0;
+        single += rows.isPresent() ? 1 : 0;
+        return single + settings.size() + personal.size();
+    }
 }
