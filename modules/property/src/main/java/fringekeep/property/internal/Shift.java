@@ -1,0 +1,23 @@
+package fringekeep.property.internal;
+
+import fringekeep.archive.record.Hash;
+import org.jspecify.annotations.Nullable;
+
+/**
+ * One shared parameter moved by an amount, or nothing moved.
+ *
+ * @param shared which
+ * @param by how far (SI)
+ */
+record Shift(@Nullable Shared shared, double by) {
+    /** Everything as recorded. */
+    static final Shift NONE = new Shift(null, 0);
+
+    /** How far a parameter is moved. */
+    double of(Hash source, String parameter) {
+        boolean moved = shared != null
+                && shared.source().equals(source)
+                && shared.parameter().equals(parameter);
+        return moved ? by : 0;
+    }
+}
