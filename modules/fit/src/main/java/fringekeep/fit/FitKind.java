@@ -144,6 +144,11 @@ public final class FitKind implements RecordKind {
                     .orElse(scan.target().hex());
             asked.add(thing + " " + scan.channel().orElse("counts"));
         }
+        return question(asked);
+    }
+
+    /** The same from texts {@code thing channel}. */
+    static String question(List<String> asked) {
         return "fit " + String.join("; ", asked.stream().sorted().distinct().toList());
     }
 }
