@@ -1,0 +1,203 @@
+package fringekeep.desk.window;
+
+import com.formdev.flatlaf.FlatDarkLaf;
+import com.formdev.flatlaf.FlatLaf;
+import com.formdev.flatlaf.FlatLightLaf;
+import fringekeep.archive.Archive;
+import fringekeep.archive.Archives;
+import fringekeep.archive.Circumstances;
+import fringekeep.archive.kind.Kinds;
+import fringekeep.archive.problem.Problem;
+import fringekeep.archive.problem.ProblemException;
+import fringekeep.desk.look.Ink;
+import fringekeep.desk.look.Texts;
+import fringekeep.desk.run.Runner;
+import fringekeep.desk.session.Stops;
+import fringekeep.drawing.Picture;
+import fringekeep.drawing.PictureFiles;
+import java.awt.Window;
+import java.io.File;
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.function.Supplier;
+import javax.swing.JFileChooser;
+import javax.swing.SwingUtilities;
+import org.openide.LifecycleManager;
+import org.openide.util.Lookup;
+
+/** The one desk of the program, and what it needs of files and dialogs. Lives on the window thread. */
+public final class Program implements DeskHost {
+    private static final Texts TEXTS = new Texts("fringekeep.desk.window.Texts", Program.class);
+    private static final String BUILD = "1.0.0";
+    private static final Supplier<Program> ONLY = once(Program::new);
+
+    private final Runner runner = Runner.forWindow();
+    private final Memory memory = Memory.ofUser();
+    private final Desk desk = new Desk(runner, Stops.shipped(), this, memory);
+
+    private Program() {}
+
+    private static Supplier<Program> once(Supplier<Program> maker) {
+        return new Supplier<>() {
+            private Optional<Program> made = Optional.empty();
+
+            @Override
+            public Program get() {
+                if (made.isEmpty()) {
+                    made = Optional.of(maker.get());
+                }
+                return made.get();
+            }
+        };
+    }
+
+    /** The program; made at the first call, on the window thread. */
+    public static Program only() {
+        return ONLY.get();
+    }
+
+    /** Its desk. */
+    public Desk desk() {
+        return desk;
+    }
+
+    /** What the program does once its window is up: the archive named at the start, else the last one. */
+    void started() {
+        Optional<String> named = Optional.ofNullable(System.getProperty("fringekeep.open"));
+        if (named.isPresent()) {
+            openArchive(Path.of(named.get()));
+            return;
+        }
+        memory.get("archive").map(Path::of).filter(Files::isDirectory).ifPresent(this::openArchive);
+    }
+
+    /** Opens an archive. */
+    public void openArchive(Path folder) {
+        runner.run(
+                "open",
+                work -> {
+                    work.progress(0, 0, TEXTS.of("status.opening", String.valueOf(folder.getFileName())));
+                    return Archives.open(folder, kinds(), Circumstances.real(BUILD));
+                },
+                archive -> opened(folder, archive));
+    }
+
+    private void opened(Path folder, Archive archive) {
+        memory.put("archive", folder.toAbsolutePath().toString());
+        desk.open(archive);
+        desk.focusRows();
+    }
+
+    private static Kinds kinds() {
+        ClassLoader all = Optional.ofNullable(Lookup.getDefault().lookup(ClassLoader.class))
+                .orElseGet(Program.class::getClassLoader);
+        return Kinds.announced(all);
+    }
+
+    @Override
+    public void chooseArchive() {
+        JFileChooser chooser = new JFileChooser();
+        chooser.setDialogTitle(TEXTS.of("open.title"));
+        chooser.setFileSelectionMode(JFileChooser.DIRECTORIES_ONLY);
+        if (chooser.showOpenDialog(desk) == JFileChooser.APPROVE_OPTION) {
+            openArchive(chooser.getSelectedFile().toPath());
+        }
+    }
+
+    @Override
+    public void foundArchive() {
+        new FoundingSheet()
+                .ask(
+                        window(),
+                        answers -> runner.run(
+                                "open",
+                                work -> Archives.found(
+                                        answers.folder(),
+                                        new Archives.Founding(
+                                                answers.title(),
+                                                answers.dayBoundary(),
+                                                answers.zone(),
+                                                false,
+                                                List.of(),
+                                                Optional.empty()),
+                                        kinds(),
+                                        Circumstances.real(BUILD)),
+                                archive -> opened(answers.folder(), archive)));
+    }
+
+    @Override
+    public void save(Picture picture) {
+        JFileChooser chooser = new JFileChooser();
+        chooser.setDialogTitle(TEXTS.of("save.title"));
+        chooser.setSelectedFile(new File("drawing.svg"));
+        if (chooser.showSaveDialog(desk) == JFileChooser.APPROVE_OPTION) {
+            Path file = chooser.getSelectedFile().toPath();
+            runner.run("save", work -> write(picture, file), done -> {});
+        }
+    }
+
+    static Path write(Picture picture, Path file) throws ProblemException {
+        String name = String.valueOf(file.getFileName()).toLowerCase(Locale.ROOT);
+        PictureFiles.Form form = List.of(PictureFiles.Form.values()).stream()
+                .filter(one -> name.endsWith("." + one.ending()))
+                .findFirst()
+                .orElse(PictureFiles.Form.SVG);
+        try {
+            return Files.write(file, PictureFiles.write(picture, form));
+        } catch (IOException e) {
+            throw new ProblemException(new Problem(
+                    "desk.save-drawing",
+                    TEXTS.of("save.failed") + " " + e.getMessage(),
+                    file.toString(),
+                    TEXTS.of("save.mend")));
+        }
+    }
+
+    @Override
+    public void trouble(List<Problem> problems) {
+        ProblemDialog.show(window(), TEXTS.of("trouble.title"), problems);
+    }
+
+    /** Shows that something unforeseen happened, with the place of the log. */
+    void crashed(Throwable fault, String log) {
+        Problem problem = new Problem(
+                "desk.crash", TEXTS.of("crash.what", String.valueOf(fault)), "", TEXTS.of("crash.mend", log));
+        ProblemDialog.show(window(), TEXTS.of("crash.title"), List.of(problem));
+    }
+
+    /** Changes between the light and the dark theme. */
+    void switchTheme() {
+        theme(!Ink.dark());
+        memory.put("dark", Boolean.toString(Ink.dark()));
+    }
+
+    /** Sets the theme that was left. */
+    void rememberedTheme() {
+        memory.get("dark")
+                .map(Boolean::parseBoolean)
+                .filter(dark -> dark != Ink.dark())
+                .ifPresent(Program::theme);
+    }
+
+    private static void theme(boolean dark) {
+        if (dark) {
+            FlatDarkLaf.setup();
+        } else {
+            FlatLightLaf.setup();
+        }
+        FlatLaf.updateUI();
+    }
+
+    /** Ends the program. */
+    void quit() {
+        LifecycleManager.getDefault().exit();
+    }
+
+    private Window window() {
+        return SwingUtilities.getWindowAncestor(desk);
+    }
+}

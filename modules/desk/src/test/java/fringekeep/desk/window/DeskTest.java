@@ -1,0 +1,112 @@
+package fringekeep.desk.window;
+
+import static org.assertj.core.api.Assertions.assertThat;
+
+import fringekeep.archive.problem.Problem;
+import fringekeep.desk.lab.InventedLab;
+import fringekeep.desk.run.Runner;
+import fringekeep.desk.session.Stops;
+import fringekeep.drawing.Picture;
+import java.awt.image.BufferedImage;
+import java.util.ArrayList;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Set;
+import org.junit.jupiter.api.Test;
+
+/** The whole desk, without display, with jobs run at once. */
+class DeskTest {
+    private final InventedLab lab = new InventedLab();
+    private final List<Problem> troubles = new ArrayList<>();
+    private final Desk desk =
+            new Desk(new Runner(Runnable::run, Runnable::run), Stops.shipped(), new Host(), Memory.fleeting());
+
+    private final class Host implements DeskHost {
+        @Override
+        public void chooseArchive() {}
+
+        @Override
+        public void foundArchive() {}
+
+        @Override
+        public void save(Picture picture) {}
+
+        @Override
+        public void trouble(List<Problem> problems) {
+            troubles.addAll(problems);
+        }
+    }
+
+    @Test
+    void beginsWithTheFirstSheetAndShowsTheFigureOnceAnArchiveIsOpen() {
+        assertThat(desk.sheetShown()).isEqualTo("first");
+
+        desk.open(lab.archive());
+
+        assertThat(desk.sheetShown()).isEqualTo("records");
+        assertThat(desk.stopShown()).isEqualTo(9);
+        assertThat(desk.recordPane().page().orElseThrow().record()).isEqualTo(lab.figure);
+    }
+
+    @Test
+    void aTracedFigureIsWalkedToRawCounts() {
+        desk.open(lab.archive());
+        desk.trace();
+        DeskPictures.paint(desk, 1280, 770);
+
+        assertThat(desk.sheetShown()).isEqualTo("lineage");
+        for (int i = 0; i < 3; i++) {
+            assertThat(desk.lineageSheet().raw()).isEmpty();
+            desk.lineageSheet().left();
+        }
+
+        assertThat(desk.lineageSheet().raw().orElseThrow().counts()).hasSize(31);
+        desk.back();
+        assertThat(desk.sheetShown()).isEqualTo("records");
+    }
+
+    @Test
+    void aNumberIsFoundAndOpened() {
+        desk.open(lab.archive());
+        desk.find("scan 0031");
+
+        assertThat(desk.recordPane().page().orElseThrow().record()).isEqualTo(lab.scan);
+        assertThat(desk.stopShown()).isEqualTo(6);
+        assertThat(troubles).isEmpty();
+    }
+
+    @Test
+    void wordsThatAreNoNumberNarrowTheList() {
+        desk.open(lab.archive());
+        desk.openStop(3);
+        desk.find("velocity");
+
+        assertThat(desk.listPane().table().getRowCount()).isEqualTo(1);
+    }
+
+    @Test
+    void allSheetsPaintInManyColours() {
+        desk.open(lab.archive());
+        desk.openStop(6);
+        desk.select(lab.scan);
+        BufferedImage records = DeskPictures.paint(desk, 1280, 770);
+        desk.trace();
+        BufferedImage lineage = DeskPictures.paint(desk, 1280, 770);
+        desk.keys();
+        BufferedImage keys = DeskPictures.paint(desk, 1280, 770);
+
+        assertThat(colours(records)).hasSizeGreaterThan(100);
+        assertThat(colours(lineage)).hasSizeGreaterThan(100);
+        assertThat(colours(keys)).hasSizeGreaterThan(50);
+    }
+
+    private static Set<Integer> colours(BufferedImage image) {
+        Set<Integer> colours = new HashSet<>();
+        for (int y = 0; y < image.getHeight(); y += 2) {
+            for (int x = 0; x < image.getWidth(); x++) {
+                colours.add(image.getRGB(x, y));
+            }
+        }
+        return colours;
+    }
+}
