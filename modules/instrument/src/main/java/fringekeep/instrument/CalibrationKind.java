@@ -42,6 +42,8 @@ public final class CalibrationKind implements RecordKind {
             List.of(WHAT, SUBJECT, LABEL, MODEL, FIRST, Column.deviation("first_parameter_u", FIRST), FROM, TO),
             List.of(List.of("what", "valid_from")));
 
+    private final JsonObject schemaOne = SchemaResource.read(CalibrationKind.class, "calibration-1.schema.json");
+
     /** For the service loader. */
     public CalibrationKind() {}
 
@@ -57,7 +59,10 @@ public final class CalibrationKind implements RecordKind {
 
     @Override
     public JsonObject jsonSchema(int number) {
-        return SchemaResource.read(CalibrationKind.class, "calibration-" + number + ".schema.json");
+        if (number != 1) {
+            throw new IllegalArgumentException(KIND + " has no schema number " + number);
+        }
+        return schemaOne;
     }
 
     @Override

@@ -45,6 +45,8 @@ public final class MonitorLogKind implements RecordKind {
 
     private final Computation computation = new MonitorReading();
 
+    private final JsonObject schemaOne = SchemaResource.read(MonitorLogKind.class, "monitor-log-1.schema.json");
+
     /** For the service loader. */
     public MonitorLogKind() {}
 
@@ -60,7 +62,10 @@ public final class MonitorLogKind implements RecordKind {
 
     @Override
     public JsonObject jsonSchema(int number) {
-        return SchemaResource.read(MonitorLogKind.class, "monitor-log-" + number + ".schema.json");
+        if (number != 1) {
+            throw new IllegalArgumentException(KIND + " has no schema number " + number);
+        }
+        return schemaOne;
     }
 
     @Override

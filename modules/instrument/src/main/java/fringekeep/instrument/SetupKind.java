@@ -44,6 +44,8 @@ public final class SetupKind implements RecordKind {
             List.of(LABEL, GRATINGS, PERIOD, PERIOD_U, SEPARATION, SEPARATION_U, WAVELENGTH, POWER, DEAD_TIME),
             List.of(List.of("label")));
 
+    private final JsonObject schemaOne = SchemaResource.read(SetupKind.class, "setup-1.schema.json");
+
     /** For the service loader. */
     public SetupKind() {}
 
@@ -59,7 +61,10 @@ public final class SetupKind implements RecordKind {
 
     @Override
     public JsonObject jsonSchema(int number) {
-        return SchemaResource.read(SetupKind.class, "setup-" + number + ".schema.json");
+        if (number != 1) {
+            throw new IllegalArgumentException(KIND + " has no schema number " + number);
+        }
+        return schemaOne;
     }
 
     @Override

@@ -40,6 +40,8 @@ public final class BatchKind implements RecordKind {
             List.of(LABEL, COMPOUND, CAUTIONS, PURITY, Column.deviation("purity_u", PURITY), RECEIVED),
             List.of(List.of("label")));
 
+    private final JsonObject schemaOne = SchemaResource.read(BatchKind.class, "batch-1.schema.json");
+
     /** For the service loader. */
     public BatchKind() {}
 
@@ -55,7 +57,10 @@ public final class BatchKind implements RecordKind {
 
     @Override
     public JsonObject jsonSchema(int number) {
-        return SchemaResource.read(BatchKind.class, "batch-" + number + ".schema.json");
+        if (number != 1) {
+            throw new IllegalArgumentException(KIND + " has no schema number " + number);
+        }
+        return schemaOne;
     }
 
     @Override

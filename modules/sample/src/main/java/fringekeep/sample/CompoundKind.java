@@ -52,6 +52,8 @@ public final class CompoundKind implements RecordKind {
 
     private final Computation computation = new CompoundMass();
 
+    private final JsonObject schemaOne = SchemaResource.read(CompoundKind.class, "compound-1.schema.json");
+
     /** For the service loader. */
     public CompoundKind() {}
 
@@ -67,7 +69,10 @@ public final class CompoundKind implements RecordKind {
 
     @Override
     public JsonObject jsonSchema(int number) {
-        return SchemaResource.read(CompoundKind.class, "compound-" + number + ".schema.json");
+        if (number != 1) {
+            throw new IllegalArgumentException(KIND + " has no schema number " + number);
+        }
+        return schemaOne;
     }
 
     @Override

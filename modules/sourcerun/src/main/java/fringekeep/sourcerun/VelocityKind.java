@@ -43,6 +43,8 @@ public final class VelocityKind implements RecordKind {
 
     private final Computation computation = new VelocityComputation();
 
+    private final JsonObject schemaOne = SchemaResource.read(VelocityKind.class, "velocity-1.schema.json");
+
     /** For the service loader. */
     public VelocityKind() {}
 
@@ -58,7 +60,10 @@ public final class VelocityKind implements RecordKind {
 
     @Override
     public JsonObject jsonSchema(int number) {
-        return SchemaResource.read(VelocityKind.class, "velocity-" + number + ".schema.json");
+        if (number != 1) {
+            throw new IllegalArgumentException(KIND + " has no schema number " + number);
+        }
+        return schemaOne;
     }
 
     @Override
