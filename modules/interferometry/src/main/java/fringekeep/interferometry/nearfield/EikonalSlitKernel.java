@@ -103,16 +103,17 @@ public final class EikonalSlitKernel implements TalbotKernel {
     }
 
     /**
-     * Amplitude of a diffraction order of this grating alone.
+     * Amplitude of a diffraction order of this grating alone; between whole orders, the amplitude of one slit.
      *
-     * @param order diffraction order n
-     * @return real and imaginary part of b_n = (1/d) &int; t(x) e^(-2&pi;i n x/d) dx
+     * @param order diffraction order n, need not be whole
+     * @return real and imaginary part of b_n = (1/d) &int; t(x) e^(-2&pi;i n x/d) dx over one slit
      */
-    public double[] orderAmplitude(int order) {
+    public double[] orderAmplitude(double order) {
         double wave = 2.0 * Math.PI * order / period;
         Span open = new Span(-halfOpen, halfOpen, 0.0);
-        double real = integrate(x -> StrictMath.cos(phase(x)) * StrictMath.cos(wave * x), this::phase, open, 0);
-        double imaginary = integrate(x -> StrictMath.sin(phase(x)) * StrictMath.cos(wave * x), this::phase, open, 0);
+        DoubleUnaryOperator angle = x -> phase(x) + wave * Math.abs(x);
+        double real = integrate(x -> StrictMath.cos(phase(x)) * StrictMath.cos(wave * x), angle, open, 0);
+        double imaginary = integrate(x -> StrictMath.sin(phase(x)) * StrictMath.cos(wave * x), angle, open, 0);
         return new double[] {real / period, imaginary / period};
     }
 
