@@ -168,9 +168,9 @@ final class FringeFitAssembly {
             double step = 1e-4 / Math.sqrt(expected[SymmetricMatrix.at(j, j)]);
             double[] shifted = theta.clone();
             shifted[j] = theta[j] + step;
-            double[] above = solver.score(shifted);
+            double[] above = solver.score(shifted, null);
             shifted[j] = theta[j] - step;
-            double[] below = solver.score(shifted);
+            double[] below = solver.score(shifted, null);
             for (int i = 0; i < p; i++) {
                 double slope = -(above[i] - below[i]) / (2 * step);
                 matrix[SymmetricMatrix.at(i, j)] += i == j ? slope : 0.5 * slope;

@@ -19,6 +19,10 @@ import java.util.Optional;
  * standard error the phase interval covers less than stated (54 % instead of 68.27 % at V = 0), and an undetermined phase
  * gives none.
  *
+ * <p>Measured coverage (seeded scans of known truth): within three binomial standard errors of 68.27 % and 95.45 % from 100
+ * counts a scan on at visibilities up to 0.6 and from 200 counts on at any. Scans of 50 to 100 counts with visibilities near
+ * 0.9, where the counts in the dark fringe are nearly all 0, cover 58 to 66 % and 91 to 98 % instead.
+ *
  * <p>An uncertain background taken as known, and a scaling by the dispersion, widen the profile in the ratio of the
  * standard errors with and without them. With a free period the phase interval is &plusmn;z standard errors.
  *

@@ -34,7 +34,7 @@ public record FringeSignificance(double statistic, double pValue, double deviati
             statistic = SymmetricMatrix.form(SymmetricMatrix.inverse(block, 2), vector);
         }
         double pValue = StrictMath.exp(-0.5 * statistic);
-        double deviations = pValue > 0 ? -Distributions.normalQuantile(Math.max(pValue, 1e-300)) : 37;
+        double deviations = -Distributions.normalQuantile(Math.min(Math.max(pValue, 1e-300), 1 - 1e-15));
         return Optional.of(new FringeSignificance(
                 statistic, pValue, deviations, AmplitudeLimits.threshold(widened.quadratureNoise(), 0.95)));
     }

@@ -2,6 +2,7 @@ package fringekeep.interferometry.fringe;
 
 import fringekeep.interferometry.statistics.PoissonDeviance;
 import fringekeep.interferometry.statistics.SymmetricMatrix;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Minimisers over a {@link FringeModel}: Gauss&ndash;Newton for weighted squares, scoring with linear bounds for the
@@ -13,8 +14,15 @@ import fringekeep.interferometry.statistics.SymmetricMatrix;
 final class FringeSolver {
     static final double SMALLEST_PIVOT = 1e-11;
     private static final double STEP_TOLERANCE = 1e-11;
+    private static final double ROUNDING = 1e-14;
     private static final int MOST_STEPS = 200;
     private static final double BOUND_PENALTY = 200;
+
+    /** A profile needs the deviance, not the parameters: it is settled when a step can lower it by no more than this. */
+    private static final double PROFILE_TOLERANCE = 1e-11;
+
+    /** With empty points some directions may be flat: no step can lower the deviance by more than rounding. */
+    private static final double FLAT_TOLERANCE = 1e-15;
 
     private final FringeModel model;
     private final int[] free;
@@ -47,15 +55,19 @@ final class FringeSolver {
         }
         double objective = squares(weights);
         double level = Math.max(model.observedTotal() / model.points, 1e-300);
+        boolean newton = false;
+        double before = Double.POSITIVE_INFINITY;
         for (int round = 0; round < MOST_STEPS; round++) {
             normal(weights);
             double[] scales = scales(level * meanWeight(weights));
-            System.arraycopy(gradient, 0, step, 0, n);
-            if (!SymmetricMatrix.factor(matrix, n, SMALLEST_PIVOT)) {
+            if (!(newton && useCurvature(theta, weights, 0)) && !SymmetricMatrix.factor(matrix, n, SMALLEST_PIVOT)) {
                 return End.NOT_DETERMINED;
             }
+            System.arraycopy(gradient, 0, step, 0, n);
             SymmetricMatrix.solve(matrix, n, step);
-            boolean last = small(scales);
+            newton |= slow(round, before);
+            before = decrement();
+            boolean last = small(theta, scales);
             double factor = 1;
             boolean accepted = false;
             double next = objective;
@@ -67,7 +79,7 @@ final class FringeSolver {
                 }
             }
             if (!accepted) {
-                return model.evaluate(theta) && nearlySmall(scales) ? End.FOUND : End.NO_CONVERGENCE;
+                return model.evaluate(theta) && nearlySmall(theta, scales) ? End.FOUND : End.NO_CONVERGENCE;
             }
             System.arraycopy(trial, 0, theta, 0, theta.length);
             objective = next;
@@ -90,9 +102,15 @@ final class FringeSolver {
         }
         boolean empty = hasEmptyRows();
         double[] weights = new double[model.rows];
+        boolean newton = false;
+        double before = Double.POSITIVE_INFINITY;
         for (int round = 0; round < MOST_STEPS; round++) {
             double[] scales = scoring(weights, empty, round >= 3 && model.linear());
-            if (!SymmetricMatrix.factor(matrix, n, empty ? 0 : SMALLEST_PIVOT)) {
+            if (model.polar && !newton) {
+                addPhaseCurvature(theta);
+            }
+            if (!(newton && useCurvature(theta, null, empty ? 1e-9 : 0))
+                    && !SymmetricMatrix.factor(matrix, n, empty ? 0 : SMALLEST_PIVOT)) {
                 return End.NOT_DETERMINED;
             }
             if (empty) {
@@ -101,7 +119,11 @@ final class FringeSolver {
                 System.arraycopy(gradient, 0, step, 0, n);
                 SymmetricMatrix.solve(matrix, n, step);
             }
-            boolean last = small(scales);
+            newton |= slow(round, before);
+            before = decrement();
+            boolean last = small(theta, scales)
+                    || model.polar && before < PROFILE_TOLERANCE
+                    || empty && before < FLAT_TOLERANCE;
             double factor = 1;
             boolean accepted = false;
             double next = objective;
@@ -113,7 +135,7 @@ final class FringeSolver {
                 }
             }
             if (!accepted) {
-                return model.evaluate(theta) && nearlySmall(scales) ? End.FOUND : End.NO_CONVERGENCE;
+                return model.evaluate(theta) && nearlySmall(theta, scales) ? End.FOUND : End.NO_CONVERGENCE;
             }
             System.arraycopy(trial, 0, theta, 0, theta.length);
             objective = next;
@@ -131,21 +153,33 @@ final class FringeSolver {
         }
     }
 
-    private boolean small(double[] scales) {
-        return within(scales, STEP_TOLERANCE);
+    private boolean small(double[] theta, double[] scales) {
+        return within(theta, scales, STEP_TOLERANCE);
     }
 
-    private boolean nearlySmall(double[] scales) {
-        return within(scales, 1e-6);
+    private boolean nearlySmall(double[] theta, double[] scales) {
+        return within(theta, scales, 1e-6);
     }
 
-    private boolean within(double[] scales, double tolerance) {
+    /** A step is small against the standard deviation, or lost in the rounding of the parameter. */
+    private boolean within(double[] theta, double[] scales, double tolerance) {
         for (int j = 0; j < n; j++) {
-            if (!(Math.abs(step[j]) <= tolerance * scales[j])) {
+            if (!(Math.abs(step[j]) <= tolerance * scales[j] + ROUNDING * size(theta, free[j]))) {
                 return false;
             }
         }
         return true;
+    }
+
+    /** The size whose rounding a parameter shares: of the counts for amplitudes, 1 for pure numbers. */
+    private double size(double[] theta, int parameter) {
+        boolean amplitude = parameter == 0
+                || parameter < 3 && !model.polar
+                || model.harmonicAt >= 0 && (parameter == model.harmonicAt || parameter == model.harmonicAt + 1)
+                || parameter == model.backgroundAt;
+        return amplitude
+                ? Math.abs(theta[0]) + Math.abs(theta[parameter]) + Math.abs(model.knownBackground)
+                : Math.max(1, Math.abs(theta[parameter]));
     }
 
     private static double meanWeight(double[] weights) {
@@ -210,6 +244,74 @@ final class FringeSolver {
         return base;
     }
 
+    /** Scoring that does not gain a digit in two steps is held up by the curvature of the model itself. */
+    private boolean slow(int round, double before) {
+        return !model.linear() && round >= 3 && decrement() > 0.1 * before;
+    }
+
+    /**
+     * Replaces the matrix by the factors of the observed information, from central differences of the score; leaves it as
+     * it is where that is not positive.
+     */
+    private boolean useCurvature(double[] theta, double @Nullable [] weights, double ridge) {
+        double[] curvature = new double[matrix.length];
+        double[] kept = gradient.clone();
+        double[] shifted = theta.clone();
+        for (int j = 0; j < n; j++) {
+            double width = 1e-4 / Math.sqrt(matrix[SymmetricMatrix.at(j, j)]);
+            shifted[free[j]] = theta[free[j]] + width;
+            double[] above = score(shifted, weights);
+            shifted[free[j]] = theta[free[j]] - width;
+            double[] below = score(shifted, weights);
+            shifted[free[j]] = theta[free[j]];
+            for (int i = 0; i < n; i++) {
+                double slope = -(above[i] - below[i]) / (2 * width);
+                curvature[SymmetricMatrix.at(i, j)] += i == j ? slope : 0.5 * slope;
+            }
+        }
+        model.evaluate(theta);
+        System.arraycopy(kept, 0, gradient, 0, n);
+        for (int j = 0; j < n; j++) {
+            curvature[SymmetricMatrix.at(j, j)] += ridge * matrix[SymmetricMatrix.at(j, j)];
+        }
+        if (!SymmetricMatrix.factor(curvature, n, SMALLEST_PIVOT)) {
+            return false;
+        }
+        System.arraycopy(curvature, 0, matrix, 0, matrix.length);
+        return true;
+    }
+
+    /** What the next step lowers half the deviance by, to first order. */
+    private double decrement() {
+        double sum = 0;
+        for (int j = 0; j < n; j++) {
+            sum += gradient[j] * step[j];
+        }
+        return Math.abs(sum);
+    }
+
+    /**
+     * With the visibility held far from its best value the expected information is far from the curvature along the phase,
+     * and scoring would swing. The second derivative of the counts by the phase is minus the visibility times that by it.
+     */
+    private void addPhaseCurvature(double[] theta) {
+        int at = -1;
+        for (int j = 0; j < n; j++) {
+            at = free[j] == 2 ? j : at;
+        }
+        if (at < 0) {
+            return;
+        }
+        double curvature = 0;
+        for (int row = 0; row < model.points; row++) {
+            double y = model.observed[row];
+            double pull = y == 0 ? -1 : y / model.expected[row] - 1;
+            curvature += pull * theta[1] * model.slopes[row * model.parameters + 1];
+        }
+        int diagonal = SymmetricMatrix.at(at, at);
+        matrix[diagonal] = Math.max(matrix[diagonal] + curvature, 0.05 * matrix[diagonal]);
+    }
+
     private double level() {
         double sum = 0;
         for (int row = 0; row < model.rows; row++) {
@@ -255,10 +357,7 @@ final class FringeSolver {
             if (model.observed[row] != 0 || contains(active, count, row)) {
                 continue;
             }
-            double value = model.expected[row];
-            for (int j = 0; j < n; j++) {
-                value += model.slopes[row * model.parameters + free[j]] * step[j];
-            }
+            double value = reached(row);
             if (value < lowest) {
                 lowest = value;
                 worst = row;
@@ -333,7 +432,30 @@ final class FringeSolver {
             }
             step[j] = sum;
         }
+        // Along a flat direction the unbounded step is huge and its cancellation coarse: put the step on the bounds
+        // again.
+        for (int refinement = 0; refinement < 2; refinement++) {
+            double[] left = new double[count];
+            for (int k = 0; k < count; k++) {
+                left[k] = -reached(active[k]);
+            }
+            SymmetricMatrix.solve(gram, count, left);
+            for (int j = 0; j < n; j++) {
+                for (int k = 0; k < count; k++) {
+                    step[j] += left[k] * columns[k][j];
+                }
+            }
+        }
         return multipliers;
+    }
+
+    /** Expected counts of a row after the step, to first order. */
+    private double reached(int row) {
+        double value = model.expected[row];
+        for (int j = 0; j < n; j++) {
+            value += model.slopes[row * model.parameters + free[j]] * step[j];
+        }
+        return value;
     }
 
     double squares(double[] weights) {
@@ -360,13 +482,18 @@ final class FringeSolver {
         return sum;
     }
 
-    /** The score, half the negative gradient of the deviance, for all free parameters at theta. */
-    double[] score(double[] theta) {
+    /**
+     * Half the negative gradient of the objective for all free parameters at theta: of the squares with the given weights,
+     * of the deviance without.
+     */
+    double[] score(double[] theta, double @Nullable [] weights) {
         model.evaluate(theta);
         double[] score = new double[n];
         for (int row = 0; row < model.rows; row++) {
             double y = model.observed[row];
-            double pull = y == 0 ? -1 : y / model.expected[row] - 1;
+            double pull = weights != null
+                    ? weights[row] * (y - model.expected[row])
+                    : y == 0 ? -1 : y / model.expected[row] - 1;
             for (int j = 0; j < n; j++) {
                 score[j] += pull * model.slopes[row * model.parameters + free[j]];
             }

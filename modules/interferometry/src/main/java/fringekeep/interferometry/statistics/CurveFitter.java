@@ -15,6 +15,12 @@ public final class CurveFitter {
     private static final int MOST_STEPS = 20_000;
     private static final double STEP_TOLERANCE = 1e-10;
 
+    /** A bold start first; a cautious one where the bold one ran onto a plateau. */
+    private static final double[] FIRST_DAMPINGS = {1e-3, 1, 1e3};
+
+    /** A column of slopes this much smaller than it once was, and than the data, no longer determines its parameter. */
+    private static final double VANISHED = 1e-10;
+
     private final ParametricModel model;
     private final double[] observed;
     private final double[] rootWeights;
@@ -24,6 +30,8 @@ public final class CurveFitter {
     private final double[] values;
     private final double[] slopes;
     private final double[] largest;
+    private double[] matrix = new double[0];
+    private double[] residuals = new double[0];
 
     private CurveFitter(ParametricModel model, double[] observed, double[] rootWeights, boolean poisson) {
         this.model = model;
@@ -87,7 +95,16 @@ public final class CurveFitter {
             return new CurveFitOutcome.Failure(
                     CurveFitOutcome.Reason.BAD_START, "The model has no meaning at the start values.");
         }
-        int steps = descend(theta, objective);
+        CurveFitOutcome outcome = attempt(theta.clone(), objective, FIRST_DAMPINGS[0]);
+        for (int k = 1; k < FIRST_DAMPINGS.length && !(outcome instanceof CurveFit); k++) {
+            outcome = attempt(theta.clone(), objective, FIRST_DAMPINGS[k]);
+        }
+        return outcome;
+    }
+
+    private CurveFitOutcome attempt(double[] theta, double objective, double firstDamping) {
+        Arrays.fill(largest, 0);
+        int steps = descend(theta, objective, firstDamping);
         if (steps < 0) {
             return new CurveFitOutcome.Failure(
                     CurveFitOutcome.Reason.NO_CONVERGENCE,
@@ -97,9 +114,9 @@ public final class CurveFitter {
     }
 
     /** Damped steps down to a relative step below the tolerance; returns the number of steps, -1 if there is no end. */
-    private int descend(double[] theta, double first) {
+    private int descend(double[] theta, double first, double firstDamping) {
         double objective = first;
-        double damping = 1e-3;
+        double damping = firstDamping;
         double growth = 2;
         double[] trial = new double[p];
         for (int step = 0; step < MOST_STEPS; step++) {
@@ -138,14 +155,14 @@ public final class CurveFitter {
     private CurveFitOutcome polish(double[] theta, int steps) {
         double last = Double.POSITIVE_INFINITY;
         int more = 0;
-        for (; more < 50; more++) {
+        for (; more < 200; more++) {
             fill(theta);
             double[] move = step(0);
-            if (move.length == 0) {
+            if (move.length == 0 || covariance(theta).length == 0) {
                 return notDetermined();
             }
             double size = size(theta, move);
-            if (!(size < 0.7 * last) || size == 0) {
+            if (!(size < 0.95 * last) || size == 0) {
                 if (last > 1e-3) {
                     return new CurveFitOutcome.Failure(
                             CurveFitOutcome.Reason.NO_CONVERGENCE,
@@ -165,7 +182,7 @@ public final class CurveFitter {
         }
         double objective = objective(theta);
         fill(theta);
-        double[] covariance = covariance();
+        double[] covariance = covariance(theta);
         return covariance.length == 0
                 ? notDetermined()
                 : new CurveFit(theta, covariance, objective, n - p, values, steps + more);
@@ -205,9 +222,6 @@ public final class CurveFitter {
         }
         return Double.isNaN(sum) ? Double.POSITIVE_INFINITY : sum;
     }
-
-    private double[] matrix = new double[0];
-    private double[] residuals = new double[0];
 
     /** Weighted slopes and residuals at theta. */
     private void fill(double[] theta) {
@@ -318,7 +332,13 @@ public final class CurveFitter {
     }
 
     /** Inverse of the normal matrix from the triangle of the scaled slopes; empty if singular. */
-    private double[] covariance() {
+    private double[] covariance(double[] theta) {
+        double size = 0;
+        for (int i = 0; i < n; i++) {
+            double weighted = (poisson ? 1 / Math.sqrt(Math.max(values[i], 1e-6)) : rootWeights[i]) * observed[i];
+            size += weighted * weighted;
+        }
+        size = Math.sqrt(size);
         double[] a = new double[n * p];
         double[] scales = new double[p];
         for (int j = 0; j < p; j++) {
@@ -326,7 +346,11 @@ public final class CurveFitter {
             for (int i = 0; i < n; i++) {
                 sum += matrix[i * p + j] * matrix[i * p + j];
             }
-            scales[j] = sum > 0 ? Math.sqrt(sum) : 1;
+            scales[j] = Math.sqrt(sum);
+            boolean matters = Math.abs(theta[j]) * scales[j] > VANISHED * size;
+            if (!(scales[j] > 0) || !(scales[j] > VANISHED * largest[j]) && !matters) {
+                return new double[0];
+            }
         }
         for (int i = 0; i < n; i++) {
             for (int j = 0; j < p; j++) {

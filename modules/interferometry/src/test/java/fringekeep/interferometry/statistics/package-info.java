@@ -1,0 +1,3 @@
+/** Tests of the statistics. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.interferometry.statistics;
