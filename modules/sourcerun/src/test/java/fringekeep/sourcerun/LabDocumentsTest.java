@@ -52,7 +52,8 @@ class LabDocumentsTest {
 
     private Hash find(String reference) {
         int space = reference.lastIndexOf(' ');
-        return made.get(reference.substring(0, space)).get(Integer.parseInt(reference.substring(space + 1)) - 1);
+        return made.getOrDefault(reference.substring(0, space), List.of())
+                .get(Integer.parseInt(reference.substring(space + 1)) - 1);
     }
 
     private EntrySurroundings.TakenRaw take(String path) {
