@@ -8,7 +8,7 @@ from lab import BEAMS, ENERGY_FACTOR, LONG, POWER_FACTOR, PULSED, SHORT
 from plan import ENERGIES
 
 BENCHES = {"short": SHORT, "long": LONG}
-FLUX = {"fan": 60.0, "vane": 25.0, "cluster": 600.0}      # mean detected particles per second at level 1
+FLUX = {"fan": 150.0, "vane": 25.0, "cluster": 600.0}      # mean detected particles per second at level 1
 PULSED_FLUX = 50.0                                         # particles per shot before the gratings at level 1
 POINTS = {"short": 28, "long": 32, "pulsed": 24}
 STEP = {"short": 38.0e-9, "long": 33.25e-9, "pulsed": 9.85e-9}

@@ -25,12 +25,17 @@ FLIGHT_WINDOWS = {"fan, day 1": ("55 m/s", "150 m/s"), "vane, day 2": ("85 m/s",
                   "fan, day 4": ("55 m/s", "150 m/s"), "cluster, day 4": ("78 m/s", "155 m/s")}
 
 
+CLUSTER_SIZES = ((286, 0.020), (290, 0.135), (294, 0.487), (298, 0.923), (302, 0.923), (306, 0.487), (310, 0.135),
+                 (314, 0.020))
+
+
 class Script:
     """The steps in order; the clock runs on by half a minute from step to step unless it is set."""
 
     def __init__(self, begin):
         self.now, self.person, self.steps, self.counters = begin, VIREEN, [], {}
         self.judgements = {}                   # file: (name of the judgement, why a selection leaves it out)
+        self.velocities = {}                   # beam: names
 
     def at(self, moment, person):
         assert moment >= self.now, (moment, self.now)
@@ -78,9 +83,10 @@ def substances(script):
          "remark": "Invented compound; no such molecule is known."},
         {"kind": "compound", "identity": {"names": ["demo yttrium clusters"]},
          "choices": {**mass, "composition": {
-             "sort": "cluster", "unit": "Y", "sizes": {"sort": "normal", "mean": 300, "spread": 5},
-             "window": {"from": "25400 u", "to": "27950 u"}}},
-         "remark": "Size distribution behind the mass filter as its scan showed it."})
+             "sort": "cluster", "unit": "Y", "sizes": {"sort": "list", "shares": [
+                 {"size": size, "share": share} for size, share in CLUSTER_SIZES]},
+             "window": {"from": "25300 u", "to": "28000 u"}}},
+         "remark": "Sizes behind the mass filter, in steps of four atoms, as a scan of the filter showed them."})
     received = moment(datetime(2031, 9, 22, 9, 30, tzinfo=timezone.utc))
     script.record(
         {"kind": "batch", "about": [{"role": "compound", "record": "compound 1"}],
@@ -135,7 +141,8 @@ def benches(script):
         "separations": ["18.4(1) mm", "18.4(1) mm"], "delays": ["30.000(5) us", "30.000(5) us"],
         "detector": {"sort": "laser-ionisation", "responds": "density"},
         "cautions": ["ultraviolet-laser", "class-4-laser", "high-voltage", "vacuum", "gas-under-pressure"],
-        "acknowledged": True, "words": [{"name": "beam profile of the pulses", "text": "flat, 8.0 square millimetres"}]}})
+        "acknowledged": True,
+        "words": [{"name": "beam profile of the pulses", "text": "flat, 8.0 square millimetres"}]}})
 
 
 def power_scale(scale, deviation, begin, **links):
@@ -214,14 +221,16 @@ def velocities(script, day, beam, run_name):
             "mean": "612(6) m/s", "spread": "18(2) m/s", "shape": "normal"}})]
     key = beam.split(",")[0]
     window = dict(zip(("from", "to"), FLIGHT_WINDOWS[beam]))
-    common = {"constants": "CODATA 2018", "distance": "1480(3) mm", "background": "outside-window",
-              "detector": "flux", **window}
+    common = {"constants": "CODATA 2018", "distance": "1480(3) mm", "detector": "flux", **window}
+    law = {"shape": "shifted-flux", "background": "fitted"}
+    trace = {"shape": "as-measured", "background": "outside-window"}
     columns = {"encoding": "UTF-8", "delimiter": "tab", "decimal": ".", "comment": "#", "skip": 1,
                "timeColumn": 0, "timeUnit": "ms", "countsColumn": 1}
     names = [f"day-{day}/tf-{day}-{key}-{sort}.txt" for sort in ("single", "random")]
-    single = {"method": "velocity.flight-single-slot/1", **common, "label": f"{beam}, one slot",
+    single = {"method": "velocity.flight-single-slot/1", **common, **law, "label": f"{beam}, one slot",
               "timeZero": "0.350(20) ms", "slotOpening": "0.40 ms", "reading": columns}
-    random = {"method": "velocity.flight-pseudo-random/1", **common, "label": f"{beam}, pseudo-random",
+    random = {"method": "velocity.flight-pseudo-random/1", **common, **(trace if key == "vane" else law),
+              "label": f"{beam}, pseudo-random",
               "timeZero": "0.000(20) ms", "binWidth": "0.25 ms exact", "direction": "forward",
               "sequence": "".join(map(str, flights.sequence())), "reading": columns}
     return [script.record({"kind": "velocity", "about": about, "inputs": [{"role": "trace", "raw": name}],
@@ -318,12 +327,11 @@ def background_of(file):
 
 
 def fit_choices(bench):
+    """What was asked; period and dead time come from the setup."""
     common = {"method": "fringe.poisson-likelihood/1", "constants": "CODATA 2018", "combine": "single",
-              "driftOrder": 0, "period": {"sort": "fixed", "si": 7.8815e-8 if bench == "pulsed" else 2.66e-7,
-                                          "from": "setup"}}
+              "driftOrder": 0}
     if bench == "long":
-        return {**common, "deadTime": {"sort": "setup", "si": 6e-5, "u": 2e-6, "model": "non-extending"},
-                "background": {"sort": "channel", "channel": "dark"}}
+        return {**common, "deadTime": {"sort": "setup"}, "background": {"sort": "channel", "channel": "dark"}}
     return {**common, "deadTime": {"sort": "none"}, "background": {"sort": "scan"}}
 
 
@@ -362,6 +370,10 @@ def clock_change(script, day):
     """Scans the wall clock shows for the second time are read anew with the begin entered by hand."""
     twice = [file for file in day.files if file.bench == "long" and shown_twice(file.start)]
     if twice:
+        script.record({"kind": "note", "about": [{"role": "subject", "record": SETUPS["long"]}], "content": {
+            "heading": "The long bench's clock shows an hour twice tonight",
+            "at": moment(twice[0].start)},
+            "remark": "Its files tell no offset. Begin of the second pass is taken from the day sheet."})
         script.record(*[{"kind": "scan", "corrects": scan(file.name), "remark": "Taken after the clock was put back.",
                          "inputs": [{"role": "raw", "raw": file.name},
                                     {"role": "profile", "record": PROFILES["long"]}],
@@ -378,7 +390,7 @@ def night(script, day, offset, known_series):
     for beam in dict.fromkeys(file.beam for file in day.files):
         files = [file for file in day.files if file.beam == beam]
         run_name = run(script, beam, files[0].start, min(end, files[-1].start + timedelta(minutes=10)))
-        velocity_names = velocities(script, day.number, beam, run_name)
+        velocity_names = script.velocities[beam] = velocities(script, day.number, beam, run_name)
         for name in dict.fromkeys(file.series for file in files if file.series):
             known_series[name] = series(script, name)
         place(script, day, beam, run_name, velocity_names, known_series)
@@ -442,6 +454,63 @@ def results(script, judgements):
         {"kind": "quoted", "about": [{"role": "compound", "record": "compound 2"}], "content": {
             "what": "polarizability-volume", "of": "demo vane", "quantity": "176(12) Ao3", "how": "calculated",
             "source": "Invented for the demo lab; no such calculation exists.", "conditions": "532 nm"}})
+    properties(script)
+    figure(script)
+
+
+CALIBRATED = {1: "calibration 1 at 2031-10-14T17:40:00Z", 2: "calibration 1 at 2031-10-17T19:05:00Z",
+              3: "calibration 1 at 2031-10-21T15:30:00Z"}
+
+
+def properties(script):
+    """Polarizabilities; the vane's series ends before its first maximum, so its factor is that of the bench."""
+    free = {"crossSection": {"sort": "free"}, "factor": {"sort": "free"}}
+    held = {"crossSection": {"sort": "none"}, "factor": {"sort": "given", "value": 0.96}}
+    for selection, beam, compound, asked in (("selection 1", "fan, day 1", "compound 1", free),
+                                             ("selection 2", "fan, day 3", "compound 1", free),
+                                             ("selection 3", "vane, day 2", "compound 2", held),
+                                             ("selection 4", "cluster, day 3", "compound 3", free)):
+        script.record({"kind": "property", "inputs": [
+            {"role": "selection", "record": selection}, {"role": "velocity", "record": script.velocities[beam][-1]},
+            {"role": "compound", "record": compound}, {"role": "calibration", "record": CALIBRATED[int(beam[-1])]}],
+            "choices": {"method": "property.polarizability-power/1", "constants": "CODATA 2018",
+                        "description": "quantum",
+                        "powerSetting": "laser power", "bias": "noise-subtracted",
+                        "recoil": "standing-mode-coherent", "heightNodes": 2, **asked}})
+
+
+def figure(script):
+    """Three curves of visibility against power, and the polarizability volumes beside a quoted one."""
+    def curves(place):
+        return [{"input": place, "series": "quantum-band", "label": "", "tone": "quantum"},
+                {"input": place, "series": "quantum", "label": "matter waves", "tone": "quantum"},
+                {"input": place, "series": "classical", "label": "point particles", "tone": "classical",
+                 "stroke": "dashed"},
+                {"input": place, "series": "points", "label": "measured", "tone": "ink", "shape": "dot"}]
+
+    power = {"label": "laser power", "unit": "W", "from": 0}
+    visibility = {"label": "visibility", "unit": "1", "from": 0}
+    panels = [{"name": name, "heading": heading, "legend": name == "a", "x": power, "y": visibility,
+               "series": curves(place)}
+              for name, heading, place in (("a", "demo fan, first night", 0),
+                                           ("b", "demo vane, short of the first maximum", 2),
+                                           ("c", "yttrium clusters", 3))]
+    panels.append({"name": "d", "heading": "polarizability volume of demo fan", "legend": True,
+                   "x": {"label": "night", "unit": "1", "from": 0, "to": 4},
+                   "y": {"label": "polarizability volume", "unit": "Ao3"}, "series": [
+                       {"input": 0, "series": "value", "estimate": "polarizabilityVolume", "at": 1,
+                        "label": "first night", "tone": "ink", "shape": "dot"},
+                       {"input": 1, "series": "value", "estimate": "polarizabilityVolume", "at": 3,
+                        "label": "third night", "tone": "ink", "shape": "circle"},
+                       {"input": 4, "series": "value", "label": "calculated (invented)", "tone": "quiet",
+                        "stroke": "dotted"}]})
+    script.record({"kind": "figure", "inputs": [
+        *({"role": "series", "record": f"property {number}"} for number in range(1, 5)),
+        {"role": "value", "record": "quoted 1"}],
+        "choices": {"method": "figure.table/1", "constants": "CODATA 2018", "title": "Visibility against laser power",
+                    "caption": "Invented data of the demo lab. Visibility against laser power with both descriptions, "
+                               "and the polarizability volume of demo fan on two nights beside a calculated value.",
+                    "widthMillimetres": 170, "heightMillimetres": 130, "panelsInRow": 2, "panels": panels}})
 
 
 def select(script, name, judgements):

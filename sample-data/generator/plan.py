@@ -108,6 +108,7 @@ def _third():
     day.opening("short", "fan, day 3")
     day.series("short", "fan, day 3", "fan power, day 3", FAN_POWERS, 1.0)
     day.add("short", "fan, day 3", "reference", 1.0, mishap="mode hop")
+    day.series("short", "fan, day 3", "fan power, day 3", FAN_POWERS, 1.0, downwards=True)
     day.opening("long", "cluster, day 3")
     day.series("long", "cluster, day 3", "cluster power, day 3", CLUSTER_POWERS, 0.4)
     day.add("long", "cluster, day 3", "reference", 0.4, mishap="position jumps back")
