@@ -3,6 +3,7 @@ package fringekeep.archive.graph;
 import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.ThingId;
 import java.time.Instant;
+import java.util.Collection;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
@@ -21,6 +22,9 @@ public interface Graph {
     /** Why a record is outdated; empty when it is not. */
     List<Cause> causes(Hash record);
 
+    /** All outdated records. Worked out once for a snapshot, forward from what was corrected, judged or continued. */
+    Set<Hash> outdated();
+
     /** Everything upstream over inputs, records only, in order of dependence (inputs before users). */
     List<Hash> upstream(Hash record);
 
@@ -32,6 +36,16 @@ public interface Graph {
 
     /** The record that stands for this one now: the end of its chain of corrections. Empty while disputed. */
     Optional<Hash> current(Hash record);
+
+    /** Everyone in an open dispute with a current record, itself included; empty when it is not disputed. */
+    List<Hash> rivals(Hash record);
+
+    /**
+     * Who is to be relied on among records that answer one question (record format 1, section 9).
+     *
+     * @param sameQuestion records of one kind with an equal question; corrected and withdrawn ones are left aside
+     */
+    Preference preferred(Collection<Hash> sameQuestion);
 
     /** All records of a thing in journal order. */
     List<Hash> records(ThingId thing);
@@ -54,6 +68,20 @@ public interface Graph {
      * @param role role, empty for corrects and after
      */
     record Link(Hash from, Hash to, LinkSort sort, String role) {}
+
+    /**
+     * Who is preferred.
+     *
+     * @param chosen the one to rely on; empty when several stand and no judgement decides
+     * @param candidates those that are current and not withdrawn, in journal order
+     * @param because the judgement that decides, where one does
+     */
+    record Preference(Optional<Hash> chosen, List<Hash> candidates, Optional<Hash> because) {
+        /** Copies. */
+        public Preference {
+            candidates = List.copyOf(candidates);
+        }
+    }
 
     /** Members of a head that link. */
     enum LinkSort {

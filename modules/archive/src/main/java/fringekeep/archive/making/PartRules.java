@@ -2,7 +2,7 @@ package fringekeep.archive.making;
 
 import fringekeep.archive.NewRecord;
 import fringekeep.archive.internal.records.SchemaWalk;
-import fringekeep.archive.internal.records.SchemaWalk.QuantityPlace;
+import fringekeep.archive.internal.records.SchemaWalk.Place;
 import fringekeep.archive.json.CanonicalJson;
 import fringekeep.archive.json.Json;
 import fringekeep.archive.json.JsonObject;
@@ -93,7 +93,7 @@ final class PartRules {
 
     private static List<Problem> quantities(JsonObject schema, JsonObject body) {
         List<Problem> problems = new ArrayList<>();
-        for (QuantityPlace place : SchemaWalk.quantities(schema, body)) {
+        for (Place place : SchemaWalk.quantities(schema, body)) {
             if (JsonPointer.resolve(body, place.pointer()).orElseThrow() instanceof JsonObject json) {
                 Quantity quantity = QuantityJson.read(json);
                 problems.addAll(QuantityJson.examine(quantity, place.siUnit(), place.pointer()));

@@ -24,17 +24,19 @@ import java.util.Set;
 import java.util.stream.Stream;
 
 /** A kind for tests: any content, or choices with a number whose square is the result. */
-record DemoKind(String name, JsonObject schemaJson, List<Role> inputRoles, List<Role> aboutRoles, boolean mayContinue)
+public record DemoKind(
+        String name, JsonObject schemaJson, List<Role> inputRoles, List<Role> aboutRoles, boolean mayContinue)
         implements RecordKind {
-    static DemoKind open(String name, List<Role> inputs, List<Role> about) {
+    public static DemoKind open(String name, List<Role> inputs, List<Role> about) {
         return new DemoKind(name, JsonObject.EMPTY.with("type", "object"), inputs, about, true);
     }
 
     /** With content {"length": quantity in metres, "label"?: text}. */
-    static DemoKind measured(String name) {
+    public static DemoKind measured(String name) {
         JsonObject length = JsonObject.EMPTY
                 .with("$ref", "common-1.schema.json#/$defs/quantity")
-                .with("siUnit", "m");
+                .with("siUnit", "m")
+                .with("usual", JsonObject.EMPTY.with("from", 1e-9).with("to", 10));
         JsonObject content = strict(JsonObject.EMPTY
                         .with("length", length)
                         .with("label", JsonObject.EMPTY.with("type", "string").with("maxLength", 5)))

@@ -13,6 +13,7 @@ import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.Head;
 import fringekeep.archive.record.InputReference;
 import fringekeep.archive.record.KindName;
+import fringekeep.archive.record.PartName;
 import fringekeep.archive.record.PayloadReference;
 import fringekeep.archive.record.ThingId;
 import java.util.ArrayList;
@@ -71,6 +72,23 @@ public final class HeadCodec {
                     "Refer to fewer records; nothing has been stored."));
         }
         return bytes;
+    }
+
+    /**
+     * A digest of what a record says: inputs, about, after, payloads, content, choices, result; neither who and when nor of
+     * which thing. Equal digests mean that two records say the same (record format 1, section 8).
+     */
+    public static Hash says(Head head) {
+        SortedMap<String, Hash> parts = new TreeMap<>(head.parts());
+        parts.remove(PartName.MADE.text());
+        JsonObject said = json(head)
+                .without("kind")
+                .without("schema")
+                .without("thing")
+                .without("sealed")
+                .without("corrects")
+                .with("parts", json(parts));
+        return Hash.of(CanonicalJson.write(said));
     }
 
     private static JsonObject json(Head head) {

@@ -13,22 +13,34 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 
 /**
- * Walks a value along its schema and finds the places where the schema asks for a quantity. Branches of a choice that the
+ * Walks a value along its schema and finds the places where the schema asks for a quantity or a moment. Branches of a choice that the
  * value contradicts by a constant are left aside.
  */
 public final class SchemaWalk {
     private static final String QUANTITY = "common-1.schema.json#/$defs/quantity";
+    private static final String MOMENT = "common-1.schema.json#/$defs/moment";
     private static final int DEEPEST = 100;
     private final JsonObject root;
-    private final Map<String, QuantityPlace> places = new LinkedHashMap<>();
+    private final String definition;
+    private final Map<String, Place> places = new LinkedHashMap<>();
 
-    private SchemaWalk(JsonObject root) {
+    private SchemaWalk(JsonObject root, String definition) {
         this.root = root;
+        this.definition = definition;
     }
 
     /** The places in a value where the schema asks for a quantity, whatever stands there. */
-    public static List<QuantityPlace> quantities(JsonObject schema, Json value) {
-        SchemaWalk walk = new SchemaWalk(schema);
+    public static List<Place> quantities(JsonObject schema, Json value) {
+        return places(schema, value, QUANTITY);
+    }
+
+    /** The places in a value where the schema asks for a moment. */
+    public static List<Place> moments(JsonObject schema, Json value) {
+        return places(schema, value, MOMENT);
+    }
+
+    private static List<Place> places(JsonObject schema, Json value, String definition) {
+        SchemaWalk walk = new SchemaWalk(schema, definition);
         walk.visit(schema, value, "", 0);
         return List.copyOf(walk.places.values());
     }
@@ -38,11 +50,9 @@ public final class SchemaWalk {
             return;
         }
         Optional<String> reference = schema.text("$ref");
-        if (reference.isPresent() && reference.get().endsWith(QUANTITY)) {
+        if (reference.isPresent() && reference.get().endsWith(definition)) {
             places.merge(
-                    pointer,
-                    QuantityPlace.of(schema, pointer),
-                    (a, b) -> a.siUnit().isPresent() ? a : b);
+                    pointer, Place.of(schema, pointer), (a, b) -> a.siUnit().isPresent() ? a : b);
         } else {
             reference.flatMap(this::local).ifPresent(target -> visit(target, value, pointer, depth + 1));
         }
@@ -129,18 +139,17 @@ public final class SchemaWalk {
     }
 
     /**
-     * A place where a quantity is asked for.
+     * A place where one of the shared definitions is asked for; unit and range are for quantities.
      *
      * @param pointer into the value
      * @param siUnit unit it must reduce to; empty = any
      * @param usualFrom lower end of what is usual (SI)
      * @param usualTo upper end of what is usual (SI)
      */
-    public record QuantityPlace(
-            String pointer, Optional<String> siUnit, OptionalDouble usualFrom, OptionalDouble usualTo) {
-        static QuantityPlace of(JsonObject schema, String pointer) {
+    public record Place(String pointer, Optional<String> siUnit, OptionalDouble usualFrom, OptionalDouble usualTo) {
+        static Place of(JsonObject schema, String pointer) {
             JsonObject usual = schema.object("usual").orElse(JsonObject.EMPTY);
-            return new QuantityPlace(pointer, schema.text("siUnit"), usual.number("from"), usual.number("to"));
+            return new Place(pointer, schema.text("siUnit"), usual.number("from"), usual.number("to"));
         }
     }
 }
