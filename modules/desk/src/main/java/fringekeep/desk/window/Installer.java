@@ -22,6 +22,11 @@ public final class Installer extends ModuleInstall {
 
     @Override
     public void validate() {
+        if (!java.awt.GraphicsEnvironment.isHeadless()) {
+            Type.register();
+            JFrame.setDefaultLookAndFeelDecorated(true);
+            JDialog.setDefaultLookAndFeelDecorated(true);
+        }
         FlatLaf.registerCustomDefaultsSource("fringekeep.desk.look", Installer.class.getClassLoader());
     }
 
@@ -30,9 +35,6 @@ public final class Installer extends ModuleInstall {
         if (java.awt.GraphicsEnvironment.isHeadless()) {
             return;
         }
-        Type.register();
-        JFrame.setDefaultLookAndFeelDecorated(true);
-        JDialog.setDefaultLookAndFeelDecorated(true);
         Thread.setDefaultUncaughtExceptionHandler((thread, fault) -> {
             LOG.log(Level.ERROR, "unforeseen in " + thread.getName(), fault);
             SwingUtilities.invokeLater(() -> Program.only().crashed(fault, log()));

@@ -7,7 +7,7 @@ import org.netbeans.swing.tabcontrol.customtabs.TabbedType;
 import org.openide.util.lookup.ServiceProvider;
 
 /** Gives the platform a place for its components that shows no tabs. */
-@ServiceProvider(service = TabbedComponentFactory.class)
+@ServiceProvider(service = TabbedComponentFactory.class, position = 10)
 public final class OneSheetFactory implements TabbedComponentFactory {
     @Override
     public Tabbed createTabbedComponent(TabbedType type, WinsysInfoForTabbedContainer info) {

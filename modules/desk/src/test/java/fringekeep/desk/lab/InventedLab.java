@@ -360,7 +360,7 @@ public final class InventedLab {
                         (long) arguments[1] > 1 ? List.of() : byKind.getOrDefault((String) arguments[0], List.of());
                     case "counts" -> counts();
                     case "list" -> page((Listing) arguments[0]);
-                    case "graph" -> graph;
+                    case "graph" -> graph.asGraph();
                     case "graphReady" -> true;
                     case "find" -> find((String) arguments[0]);
                     case "onCommit" -> (AutoCloseable) () -> {};
@@ -371,7 +371,7 @@ public final class InventedLab {
 
     /** The graph. */
     public Graph graph() {
-        return graph;
+        return graph.asGraph();
     }
 
     private Map<String, Long> counts() {
