@@ -94,11 +94,15 @@ final class CurveFitter {
         for (int step = 0; step < 4; step++) {
             evaluate(polished);
             double[] trial = polished.clone();
-            if (!assemble() || !(move(trial, 0.0) < shortest)) {
+            double length = assemble() ? move(trial, 0.0) : Double.POSITIVE_INFINITY;
+            if (!(length < shortest)) {
                 break;
             }
             shortest = 1e-6;
             polished = trial;
+            if (length < 1e-11) {
+                break;
+            }
         }
         return new Minimum(polished, evaluate(polished), true);
     }

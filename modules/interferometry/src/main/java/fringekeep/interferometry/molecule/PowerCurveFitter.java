@@ -10,6 +10,7 @@ import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.function.DoubleUnaryOperator;
 
 /**
  * Fits optical polarizability, and where asked absorption cross section and remaining visibility factor, to visibility
@@ -33,6 +34,9 @@ public record PowerCurveFitter(PowerSeriesSetup setup, BeamEnsemble ensemble, Po
     private static final double ARGUMENT_STEP = 0.05;
     private static final int MOST_STEPS = 20_000;
     private static final int MOST_MINIMA = 12;
+    /** A table pays if it costs no more values than this many looks at each point. */
+    private static final double TABLE_WORTH = 2000.0;
+
     private static final double LARGEST_START_FACTOR = 1.5;
     private static final double NEARBY = 9.0;
     private static final double POOR = 1e-3;
@@ -71,7 +75,9 @@ public record PowerCurveFitter(PowerSeriesSetup setup, BeamEnsemble ensemble, Po
     private PowerCurveModel prepared(VisibilityAgainstPower visibility, MeasuredCurve data, double perVolume) {
         PowerCurveModel plain = new PowerCurveModel(visibility, choices, data);
         double reach = 1.25 * highest(perVolume) * data.largestPlace();
-        return plain.phaseOnly() ? new PowerCurveModel(visibility.tabulated(reach), choices, data) : plain;
+        return plain.phaseOnly()
+                ? new PowerCurveModel(visibility.tabulated(reach, TABLE_WORTH * data.size()), choices, data)
+                : plain;
     }
 
     private double lowest(double perVolume) {
@@ -107,7 +113,7 @@ public record PowerCurveFitter(PowerSeriesSetup setup, BeamEnsemble ensemble, Po
         minima.add(found);
     }
 
-    /** Starting points: local minima of the scan, the deepest first. */
+    /** Starting points: local minima of the scan, the deepest first, without those far too shallow to win. */
     private List<double[]> starts(PowerCurveModel model, double perVolume) {
         List<Scanned> scanned = new ArrayList<>();
         double[] absorptions = choices.fitCrossSection() ? START_ABSORPTIONS : new double[] {0.0};
@@ -115,7 +121,12 @@ public record PowerCurveFitter(PowerSeriesSetup setup, BeamEnsemble ensemble, Po
             scan(model, perVolume, absorption, scanned);
         }
         scanned.sort(Comparator.comparingDouble(Scanned::chiSquare));
-        return scanned.stream().limit(MOST_MINIMA).map(Scanned::start).toList();
+        double hopeless = scanned.isEmpty() ? 0.0 : 4.0 * scanned.get(0).chiSquare() + 50.0;
+        return scanned.stream()
+                .filter(minimum -> minimum.chiSquare() <= hopeless)
+                .limit(MOST_MINIMA)
+                .map(Scanned::start)
+                .toList();
     }
 
     private record Scanned(double[] start, double chiSquare) {}
@@ -127,11 +138,18 @@ public record PowerCurveFitter(PowerSeriesSetup setup, BeamEnsemble ensemble, Po
         double ratio = absorption
                 * model.visibility().meanArgumentFactor()
                 / Math.max(model.visibility().meanAbsorptionFactor(), Double.MIN_NORMAL);
+        Optional<DoubleUnaryOperator> ray = choices.fitCrossSection()
+                ? Optional.of(model.visibility()
+                        .alongRay(ratio, high * model.largestPower(), steps * (double) model.points()))
+                : Optional.empty();
         Scanned before = new Scanned(new double[0], Double.POSITIVE_INFINITY);
         Scanned here = before;
         for (int step = 0; step <= steps; step++) {
             double volume = low + (high - low) * step / steps;
-            Scanned next = scanned(model, volume, choices.fitCrossSection() ? ratio * volume : choices.crossSection());
+            double crossSection = choices.fitCrossSection() ? ratio * volume : choices.crossSection();
+            double[] shape =
+                    ray.map(curve -> model.shape(curve, volume)).orElseGet(() -> model.shape(volume, crossSection));
+            Scanned next = scanned(model, shape, volume, crossSection);
             if (step > 0 && here.chiSquare <= before.chiSquare && here.chiSquare <= next.chiSquare) {
                 minima.add(here);
             }
@@ -143,8 +161,7 @@ public record PowerCurveFitter(PowerSeriesSetup setup, BeamEnsemble ensemble, Po
         }
     }
 
-    private Scanned scanned(PowerCurveModel model, double volume, double crossSection) {
-        double[] shape = model.shape(volume, crossSection);
+    private Scanned scanned(PowerCurveModel model, double[] shape, double volume, double crossSection) {
         double product = 0.0;
         double square = 0.0;
         for (int k = 0; k < shape.length; k++) {
@@ -267,6 +284,8 @@ public record PowerCurveFitter(PowerSeriesSetup setup, BeamEnsemble ensemble, Po
         VisibilityAgainstPower visibility = new VisibilityAgainstPower(setup, ensemble, description);
         PowerCurveModel plain = new PowerCurveModel(visibility, choices, data);
         double reach = 2.0 * around[0] * data.largestPlace();
-        return plain.phaseOnly() ? new PowerCurveModel(visibility.tabulated(reach), choices, data) : plain;
+        return plain.phaseOnly()
+                ? new PowerCurveModel(visibility.tabulated(reach, TABLE_WORTH * data.size()), choices, data)
+                : plain;
     }
 }

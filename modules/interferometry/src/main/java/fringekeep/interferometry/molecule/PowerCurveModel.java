@@ -5,6 +5,7 @@ import fringekeep.interferometry.nearfield.VisibilityAgainstPower;
 import fringekeep.interferometry.statistics.Estimate;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.function.DoubleUnaryOperator;
 
 /**
  * V(P) = factor |2 S_1/S_0| for the solver: parameters are the polarizability volume, then, where free, cross section
@@ -108,5 +109,22 @@ final class PowerCurveModel implements CurveModel {
             shape[k] = model.visibility(data.place(k), response);
         }
         return shape;
+    }
+
+    /** The shape along a ray of one ratio of absorption to polarizability. */
+    double[] shape(DoubleUnaryOperator ray, double volume) {
+        double[] shape = new double[points];
+        for (int k = 0; k < points; k++) {
+            shape[k] = Math.abs(ray.applyAsDouble(volume * data.place(k)));
+        }
+        return shape;
+    }
+
+    int points() {
+        return points;
+    }
+
+    double largestPower() {
+        return data.largestPlace();
     }
 }

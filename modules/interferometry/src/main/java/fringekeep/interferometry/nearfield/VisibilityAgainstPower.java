@@ -5,6 +5,7 @@ import fringekeep.interferometry.special.CosineSineKernel;
 import fringekeep.interferometry.special.HalfTurn;
 import fringekeep.interferometry.special.PiecewisePolynomial;
 import java.util.Optional;
+import java.util.function.DoubleUnaryOperator;
 
 /**
  * Visibility of a slit - light - slit interferometer as a function of laser power, averaged over speed, mass and height:
@@ -21,6 +22,7 @@ import java.util.Optional;
 public final class VisibilityAgainstPower {
     private static final double CELL = 0.5;
     private static final double LARGEST_TABLE_WORK = 3e7;
+    private static final double VALUES_PER_CELL = 11.0;
 
     private final int order;
     private final double recoilSign;
@@ -69,8 +71,19 @@ public final class VisibilityAgainstPower {
      *     more than it saves (over 3e7 kernel values)
      */
     public VisibilityAgainstPower tabulated(double largestProduct) {
+        return tabulated(largestProduct, LARGEST_TABLE_WORK / weights.length);
+    }
+
+    /**
+     * The same if the table costs no more than a number of visibilities computed directly.
+     *
+     * @param largestProduct largest polarizability volume times power to be asked for (m^3 W)
+     * @param mostValues     largest number of visibilities that may be computed for the table
+     * @return a model with a table, or this model itself
+     */
+    public VisibilityAgainstPower tabulated(double largestProduct, double mostValues) {
         double cells = Math.ceil(largestProduct * largestOdd / CELL);
-        if (!(cells >= 1.0) || cells * 11.0 * weights.length > LARGEST_TABLE_WORK) {
+        if (!(cells >= 1.0) || cells * VALUES_PER_CELL > mostValues) {
             return this;
         }
         return new VisibilityAgainstPower(
@@ -133,16 +146,13 @@ public final class VisibilityAgainstPower {
         double signed = 0.0;
         double byOdd = 0.0;
         double byEven = 0.0;
+        double[] near = new double[3];
         for (int q = 0; q < weights.length; q++) {
             double z = even[q] * absorbed;
-            double a = recoilSign * z;
-            double c = odd[q] * product;
-            double lower = CosineSineKernel.coefficient(order - 1, a, c, -z);
-            double here = CosineSineKernel.coefficient(order, a, c, -z);
-            double upper = CosineSineKernel.coefficient(order + 1, a, c, -z);
-            signed = Math.fma(weights[q], here, signed);
-            byOdd = Math.fma(weights[q] * odd[q], 0.5 * (lower - upper), byOdd);
-            byEven = Math.fma(weights[q] * even[q], recoilSign * 0.5 * (lower + upper) - here, byEven);
+            CosineSineKernel.neighbours(order, recoilSign * z, odd[q] * product, -z, near);
+            signed = Math.fma(weights[q], near[1], signed);
+            byOdd = Math.fma(weights[q] * odd[q], 0.5 * (near[0] - near[2]), byOdd);
+            byEven = Math.fma(weights[q] * even[q], recoilSign * 0.5 * (near[0] + near[2]) - near[1], byEven);
         }
         return new Point(signed, power * byOdd, power * byEven);
     }
@@ -158,9 +168,11 @@ public final class VisibilityAgainstPower {
         double product = requirePower(power) * polarizabilityVolume;
         double argument = Math.abs(product) * largestOdd;
         if (table.isPresent() && argument <= table.get().end()) {
+            double[] both = new double[2];
+            table.get().valueAndDerivative(argument, both);
             double parity = order % 2 != 0 && product < 0.0 ? -1.0 : 1.0;
-            double slope = table.get().derivative(argument) * largestOdd * Math.signum(product == 0.0 ? 1.0 : product);
-            return new Point(parity * table.get().value(argument), parity * power * slope, 0.0);
+            double slope = both[1] * largestOdd * Math.signum(product == 0.0 ? 1.0 : product);
+            return new Point(parity * both[0], parity * power * slope, 0.0);
         }
         double slope = 0.0;
         for (int q = 0; q < weights.length; q++) {
@@ -168,6 +180,29 @@ public final class VisibilityAgainstPower {
             slope = Math.fma(weights[q] * odd[q], 0.5 * (Bessel.j(order - 1, c) - Bessel.j(order + 1, c)), slope);
         }
         return new Point(phaseOnly(product), power * slope, 0.0);
+    }
+
+    /**
+     * Signed visibility along the ray of one ratio of absorption to polarizability, tabulated for a search.
+     *
+     * @param crossSectionPerVolume cross section over polarizability volume (1/m), &ge; 0
+     * @param largestProduct        largest polarizability volume times power (m^3 W), &gt; 0
+     * @param mostValues            largest number of visibilities that may be computed for a table
+     * @return signed visibility against polarizability volume times power, good to about 1e-9
+     */
+    public DoubleUnaryOperator alongRay(double crossSectionPerVolume, double largestProduct, double mostValues) {
+        double cells = Math.ceil(largestProduct * largestOdd / CELL);
+        DoubleUnaryOperator direct =
+                product -> signedVisibility(1.0, new OpticalResponse(product, product * crossSectionPerVolume));
+        if (!(cells >= 1.0) || cells * VALUES_PER_CELL > mostValues) {
+            return direct;
+        }
+        PiecewisePolynomial ray =
+                PiecewisePolynomial.of(x -> direct.applyAsDouble(x / largestOdd), 0.0, CELL, (int) cells);
+        return product -> {
+            double x = product * largestOdd;
+            return x <= ray.end() ? ray.value(x) : direct.applyAsDouble(product);
+        };
     }
 
     /**

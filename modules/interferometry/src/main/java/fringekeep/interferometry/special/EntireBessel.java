@@ -24,12 +24,16 @@ public final class EntireBessel {
         if (n < 0) {
             throw new IllegalArgumentException("G_n is defined for orders from 0, not " + n);
         }
-        double root = Math.sqrt(Math.abs(w));
+        return scaledAtRoot(n, Math.sqrt(Math.abs(w)), w < 0.0);
+    }
+
+    /** The same with the root of |w| and the sign of w at hand. */
+    static double scaledAtRoot(int n, double root, boolean negative) {
         if (root < Bessel.REDUCED_BELOW) {
-            double reduced = w < 0.0 ? Bessel.reducedScaledI(n, root) : Bessel.reducedJ(n, root);
+            double reduced = negative ? Bessel.reducedScaledI(n, root) : Bessel.reducedJ(n, root);
             return reduced * BesselSeries.prefactor(n, 1.0);
         }
-        double value = w < 0.0 ? Bessel.scaledI(n, root) : Bessel.j(n, root);
+        double value = negative ? Bessel.scaledI(n, root) : Bessel.j(n, root);
         return value / power(root, n);
     }
 

@@ -122,6 +122,28 @@ public final class PiecewisePolynomial {
         return 2.0 * inverseWidth * sum;
     }
 
+    /**
+     * Value and derivative at once.
+     *
+     * @param x      argument within the table
+     * @param target filled with value and derivative
+     * @throws IllegalArgumentException if x lies outside the table or is not a number
+     */
+    public void valueAndDerivative(double x, double[] target) {
+        double position = (x - start) * inverseWidth;
+        int cell = cellOf(position, x);
+        double t = 2.0 * (position - cell) - 1.0;
+        int at = cell * POINTS;
+        double value = coefficients[at + DEGREE];
+        double slope = 0.0;
+        for (int power = DEGREE - 1; power >= 0; power--) {
+            slope = Math.fma(slope, t, value);
+            value = Math.fma(value, t, coefficients[at + power]);
+        }
+        target[0] = value;
+        target[1] = 2.0 * inverseWidth * slope;
+    }
+
     private int cellOf(double position, double x) {
         if (!(position >= 0.0 && position <= cells)) {
             throw new IllegalArgumentException(
