@@ -35,7 +35,6 @@ class Script:
     def __init__(self, begin):
         self.now, self.person, self.steps, self.counters = begin, VIREEN, [], {}
         self.judgements = {}                   # file: (name of the judgement, why a selection leaves it out)
-        self.velocities = {}                   # beam: names
 
     def at(self, moment, person):
         assert moment >= self.now, (moment, self.now)
@@ -293,7 +292,7 @@ def fits(script, day, beam):
     files = [file for file in day.files if file.beam == beam and not left_unread(file)]
     choices = fit_choices(files[0].bench)
     channel = "resonant" if files[0].bench == "pulsed" else "counts"
-    background = [scan(file.name) for file in files if background_of(file)]
+    background = [scan(file.name) for file in files if background_of(file)] or earlier_background(day, files[0].bench)
     each = [scan(file.name, number) for file in files for number, section in enumerate(file.sections)
             if section.purpose in ("signal", "reference", "laser-off") and not file.group
             and section.mishap not in WITHDRAWN and section.mishap != "drift"]
@@ -319,6 +318,13 @@ def between_references(files):
     places = [place for place, file in enumerate(series_files) if file.sections[0].purpose == "signal"]
     return ([scan(series_files[place].name) for place in places],
             [[scan(series_files[place - 1].name), scan(series_files[place + 1].name)] for place in places])
+
+
+def earlier_background(day, bench):
+    """A night without a background scan of its own takes the last one of the same bench."""
+    earlier = [file for other in days() if other.number < day.number for file in other.files
+               if file.bench == bench and background_of(file)]
+    return [scan(earlier[-1].name)] if earlier else []
 
 
 def background_of(file):
@@ -390,10 +396,11 @@ def night(script, day, offset, known_series):
     for beam in dict.fromkeys(file.beam for file in day.files):
         files = [file for file in day.files if file.beam == beam]
         run_name = run(script, beam, files[0].start, min(end, files[-1].start + timedelta(minutes=10)))
-        velocity_names = script.velocities[beam] = velocities(script, day.number, beam, run_name)
+        velocity_names = velocities(script, day.number, beam, run_name)
         for name in dict.fromkeys(file.series for file in files if file.series):
             known_series[name] = series(script, name)
-        place(script, day, beam, run_name, velocity_names, known_series)
+        # the trace of the pseudo-random chopper counts far more particles; the other one stands to compare
+        place(script, day, beam, run_name, velocity_names[-1:], known_series)
         fits(script, day, beam)
     log(script, day, offset)
 
@@ -458,25 +465,16 @@ def results(script, judgements):
     figure(script)
 
 
-CALIBRATED = {1: "calibration 1 at 2031-10-14T17:40:00Z", 2: "calibration 1 at 2031-10-17T19:05:00Z",
-              3: "calibration 1 at 2031-10-21T15:30:00Z"}
-
-
 def properties(script):
     """Polarizabilities; the vane's series ends before its first maximum, so its factor is that of the bench."""
     free = {"crossSection": {"sort": "free"}, "factor": {"sort": "free"}}
     held = {"crossSection": {"sort": "none"}, "factor": {"sort": "given", "value": 0.96}}
-    for selection, beam, compound, asked in (("selection 1", "fan, day 1", "compound 1", free),
-                                             ("selection 2", "fan, day 3", "compound 1", free),
-                                             ("selection 3", "vane, day 2", "compound 2", held),
-                                             ("selection 4", "cluster, day 3", "compound 3", free)):
-        script.record({"kind": "property", "inputs": [
-            {"role": "selection", "record": selection}, {"role": "velocity", "record": script.velocities[beam][-1]},
-            {"role": "compound", "record": compound}, {"role": "calibration", "record": CALIBRATED[int(beam[-1])]}],
-            "choices": {"method": "property.polarizability-power/1", "constants": "CODATA 2018",
-                        "description": "quantum",
-                        "powerSetting": "laser power", "bias": "noise-subtracted",
-                        "recoil": "standing-mode-coherent", "heightNodes": 2, **asked}})
+    for selection, asked in (("selection 1", free), ("selection 2", free), ("selection 3", held),
+                             ("selection 4", free)):
+        script.step("property", selection=selection, choices={
+            "method": "property.polarizability-power/1", "constants": "CODATA 2018", "description": "quantum",
+            "powerSetting": "laser power", "bias": "noise-subtracted", "recoil": "standing-mode-coherent",
+            "heightNodes": 2, **asked})
 
 
 def figure(script):

@@ -119,6 +119,7 @@ def _third():
 
 def _fourth():
     day = Day(4, datetime(2031, 10, 25, 22, 30, tzinfo=SUMMER))
+    day.add("short", "fan, day 4", "background")
     for _ in range(4):
         day.add("short", "fan, day 4", "reference", 1.0)
         day.add("short", "fan, day 4", "signal", 1.2)
