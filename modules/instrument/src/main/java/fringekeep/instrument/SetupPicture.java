@@ -4,6 +4,7 @@ import fringekeep.drawing.Axis;
 import fringekeep.drawing.Layer;
 import fringekeep.drawing.Panel;
 import fringekeep.drawing.Picture;
+import fringekeep.drawing.Shape;
 import fringekeep.drawing.Stroke;
 import fringekeep.drawing.Tone;
 import fringekeep.sample.Entered;
@@ -15,7 +16,7 @@ import java.util.OptionalDouble;
 /** The bench seen from the side: gratings, slits and plates along the beam, to scale along it. */
 final class SetupPicture {
     private static final double TOP = 1;
-    private static final double PERIODS_DRAWN = 9;
+    private static final int PERIODS_DRAWN = 9;
 
     private SetupPicture() {}
 
@@ -43,7 +44,8 @@ final class SetupPicture {
                 false,
                 OptionalDouble.of(-0.2 * reach),
                 OptionalDouble.of(1.2 * reach));
-        Axis up = new Axis("", "", false, OptionalDouble.of(-1.6 * TOP), OptionalDouble.of(1.6 * TOP));
+        Axis up = new Axis(
+                "height, not to scale", "", false, OptionalDouble.of(-1.6 * TOP), OptionalDouble.of(1.6 * TOP));
         Panel panel = new Panel("", "", along, up, layers, 1, false);
         return List.of(new Picture(setup.label(), 160, 60, 1, List.of(panel)));
     }
@@ -67,22 +69,23 @@ final class SetupPicture {
 
     private static void grating(Grating grating, int place, double at, double reach, List<Layer> layers) {
         boolean material = grating.sort() == GratingSort.MATERIAL;
-        double half = 0.01 * reach;
+        double[] heights = new double[PERIODS_DRAWN];
+        double[] places = new double[PERIODS_DRAWN];
         for (int i = 0; i < PERIODS_DRAWN; i++) {
-            double y = TOP * (2 * (i + 0.5) / PERIODS_DRAWN - 1);
+            heights[i] = TOP * (2 * (i + 0.5) / PERIODS_DRAWN - 1);
+            places[i] = at;
             double bar = 0.55 * TOP / PERIODS_DRAWN;
             if (material) {
-                layers.add(new Layer.Curve(
-                        "", Tone.INK, Stroke.SOLID, new double[] {at, at}, new double[] {y - bar, y + bar}));
-            } else {
-                layers.add(new Layer.Band(
-                        "",
-                        grating.sort() == GratingSort.DEPLETION ? Tone.CLASSICAL : Tone.QUANTUM,
-                        new double[] {at - half, at, at + half},
-                        new double[] {y, y - bar, y},
-                        new double[] {y, y + bar, y}));
+                layers.add(new Layer.Curve("", Tone.INK, Stroke.SOLID, new double[] {at, at}, new double[] {
+                    heights[i] - bar, heights[i] + bar
+                }));
             }
         }
+        if (!material) {
+            Tone tone = grating.sort() == GratingSort.DEPLETION ? Tone.CLASSICAL : Tone.QUANTUM;
+            layers.add(new Layer.Points("", tone, Shape.LOZENGE, places, heights, new double[0]));
+        }
+        double half = 0.01 * reach;
         String name = grating.name().isEmpty() ? Integer.toString(place + 1) : grating.name();
         layers.add(new Layer.Words("", Tone.INK, at - half, 1.3 * TOP, List.of(name)));
     }

@@ -15,52 +15,99 @@ import java.util.List;
 import java.util.Optional;
 
 /**
- * A velocity distribution as a picture, a series and a table. Nodes may lie unevenly, so what is drawn is the density: share
- * over the interval between the middles to the neighbours.
+ * A velocity distribution as a picture, a series and a table. Nodes may lie unevenly, so what is drawn of many is the density:
+ * of a trace the share of each bin over its width, of a law the share in a fixed interval around each velocity.
  */
 final class VelocityPicture {
+    private static final int FEW = 12;
+    private static final int GRID = 121;
+    private static final double SMOOTHING = 30;
+
     private VelocityPicture() {}
 
     static Picture of(Distribution velocities, double[] deviations) {
-        double[] nodes = velocities.nodes();
-        double[] widths = widths(nodes);
-        Layer shape;
-        if (nodes.length == 1) {
-            shape = new Layer.Sticks("", Tone.INK, nodes, velocities.weights());
-        } else if (deviations.length == nodes.length) {
-            shape = new Layer.Points(
-                    "", Tone.INK, Shape.DOT, nodes, over(velocities.weights(), widths), over(deviations, widths));
-        } else {
-            shape = new Layer.Curve("", Tone.INK, Stroke.SOLID, nodes, over(velocities.weights(), widths));
-        }
-        List<Layer> layers =
-                List.of(shape, new Layer.Ruler("mean", Tone.INK_SECOND, Stroke.DASHED, false, velocities.mean()));
+        boolean few = velocities.nodes().length <= FEW;
+        List<Layer> layers = List.of(
+                few ? sticks(velocities) : shape(velocities, deviations),
+                new Layer.Ruler("mean", Tone.INK_SECOND, Stroke.DASHED, false, velocities.mean()));
         Panel panel = new Panel(
                 "",
                 "",
                 Axis.linear("velocity", "m/s"),
-                nodes.length == 1 ? Axis.linear("share", "") : Axis.linear("share of the particles", "s/m"),
+                few ? Axis.linear("share of the particles", "") : Axis.linear("share of the particles", "s/m"),
                 layers,
                 1,
                 false);
         return new Picture("", 130, 75, 1, List.of(panel));
     }
 
-    static Plottable plottable(Distribution velocities) {
+    private static Layer sticks(Distribution velocities) {
+        return new Layer.Sticks("", Tone.INK, velocities.nodes(), velocities.weights());
+    }
+
+    private static Layer shape(Distribution velocities, double[] deviations) {
         double[] nodes = velocities.nodes();
-        double[] density = nodes.length == 1 ? velocities.weights() : over(velocities.weights(), widths(nodes));
+        if (deviations.length == nodes.length) {
+            double[] widths = widths(nodes);
+            double[] density = over(velocities.weights(), widths);
+            return new Layer.Points("", Tone.INK, Shape.DOT, nodes, density, over(deviations, widths));
+        }
+        double[] grid = grid(nodes);
+        return new Layer.Curve("", Tone.INK, Stroke.SOLID, grid, density(velocities, grid));
+    }
+
+    static Plottable plottable(Distribution velocities) {
+        boolean few = velocities.nodes().length <= FEW;
+        double[] x = few ? velocities.nodes() : grid(velocities.nodes());
         return new Plottable(List.of(new Plottable.Series(
                 "distribution",
                 "velocity distribution",
-                Plottable.Sort.CURVE,
+                few ? Plottable.Sort.POINTS : Plottable.Sort.CURVE,
                 "velocity",
                 "m/s",
                 "share of the particles",
-                nodes.length == 1 ? "1" : "s/m",
-                nodes,
-                density,
+                few ? "1" : "s/m",
+                x,
+                few ? velocities.weights() : density(velocities, x),
                 new double[0],
                 List.of())));
+    }
+
+    /** Velocities at even distances from the first node to the last. */
+    private static double[] grid(double[] nodes) {
+        double[] grid = new double[GRID];
+        double span = nodes[nodes.length - 1] - nodes[0];
+        for (int i = 0; i < GRID; i++) {
+            grid[i] = nodes[0] + span * i / (GRID - 1);
+        }
+        return grid;
+    }
+
+    /** Share in a fixed interval around each velocity over its width: nodes of quadratures lie too unevenly for less. */
+    private static double[] density(Distribution velocities, double[] grid) {
+        double[] nodes = velocities.nodes();
+        double[] weights = velocities.weights();
+        double half = (nodes[nodes.length - 1] - nodes[0]) / SMOOTHING / 2;
+        double[] density = new double[grid.length];
+        for (int i = 0; i < grid.length; i++) {
+            density[i] = (below(nodes, weights, grid[i] + half) - below(nodes, weights, grid[i] - half)) / (2 * half);
+        }
+        return density;
+    }
+
+    /** Share of the particles slower than a velocity: half a node's share lies on either side of it. */
+    private static double below(double[] nodes, double[] weights, double velocity) {
+        double sum = 0;
+        for (int i = 0; i < nodes.length; i++) {
+            double middle = sum + weights[i] / 2;
+            if (nodes[i] >= velocity) {
+                double before = i == 0 ? 0 : sum - weights[i - 1] / 2;
+                double share = i == 0 ? 0 : (velocity - nodes[i - 1]) / (nodes[i] - nodes[i - 1]);
+                return i == 0 ? 0 : before + share * (middle - before);
+            }
+            sum += weights[i];
+        }
+        return sum;
     }
 
     static FlatTable table(Distribution velocities) {
