@@ -9,7 +9,7 @@ import java.util.Optional;
  * @param openFraction slit width over period, 0 &lt; f &lt; 1
  * @param wall         attraction of the walls, if it is taken into account
  */
-public record MaterialGrating(double period, double openFraction, Optional<WallPotential> wall) {
+public record MaterialGrating(double period, double openFraction, Optional<WallPotential> wall) implements BeamGrating {
     /** Checks period and open fraction. */
     public MaterialGrating {
         if (!(period > 0.0) || !(openFraction > 0.0 && openFraction < 1.0)) {
@@ -39,5 +39,10 @@ public record MaterialGrating(double period, double openFraction, Optional<WallP
     public TalbotKernel at(double velocity) {
         return wall.<TalbotKernel>map(w -> new EikonalSlitKernel(period, openFraction * period, w, velocity))
                 .orElseGet(() -> new SlitKernel(openFraction));
+    }
+
+    @Override
+    public TalbotKernel at(double velocity, double height) {
+        return at(velocity);
     }
 }
