@@ -1,15 +1,20 @@
 package fringekeep.archive.kind;
 
+import fringekeep.archive.internal.records.SchemaWalk;
 import fringekeep.archive.json.Json;
 import fringekeep.archive.json.JsonArray;
 import fringekeep.archive.json.JsonNumber;
 import fringekeep.archive.json.JsonObject;
+import fringekeep.archive.json.JsonPointer;
 import fringekeep.archive.problem.ProblemException;
+import fringekeep.archive.record.PartName;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.HashSet;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.Set;
 import java.util.TreeSet;
 
 /**
@@ -22,14 +27,39 @@ public final class ValueComparison {
 
     private static final int MOST_KEPT = 100;
 
+    private final Set<String> integers;
     private final List<Difference> differences = new ArrayList<>();
     private long units;
     private long count;
 
+    /** Compares all numbers of results by their distance. */
+    public ValueComparison() {
+        this(Set.of());
+    }
+
+    private ValueComparison(Set<String> integers) {
+        this.integers = integers;
+    }
+
+    /**
+     * Compares the results of a kind: what its schema calls an integer must be equal.
+     *
+     * @param schema the kind's schema, one object with a member per part
+     * @param kept the result that was kept
+     */
+    public static ValueComparison of(JsonObject schema, JsonObject kept) {
+        String part = JsonPointer.child("", PartName.RESULT.text());
+        Set<String> integers = new HashSet<>();
+        for (String pointer : SchemaWalk.integers(schema, JsonObject.EMPTY.with(PartName.RESULT.text(), kept))) {
+            integers.add(pointer.substring(Math.min(part.length(), pointer.length())));
+        }
+        return new ValueComparison(Set.copyOf(integers));
+    }
+
     /**
      * A value that is not the same.
      *
-     * @param pointer JSON pointer in the result, or {@code payload NAME, row R, column C} (rows from 0)
+     * @param pointer JSON pointer in the result, {@code payload NAME, row R, column C} or {@code payload NAME, value I} (from 0)
      * @param units distance in units in the last place; -1 where the values are no two numbers
      * @param kept what was kept, as written
      * @param now what came out, as written
@@ -69,12 +99,12 @@ public final class ValueComparison {
         if (Arrays.equals(kept, now)) {
             return;
         }
-        if (!form.equals(CsvPayload.FORM)) {
-            other("payload " + name, kept.length + " bytes", now.length + " other bytes");
-            return;
-        }
         try {
-            tables(name, CsvPayload.read(kept), CsvPayload.read(now));
+            switch (form) {
+                case CsvPayload.FORM -> tables(name, CsvPayload.read(kept), CsvPayload.read(now));
+                case NpyPayload.FORM -> grids(name, NpyPayload.read(kept), NpyPayload.read(now));
+                default -> other("payload " + name, kept.length + " bytes", now.length + " other bytes");
+            }
         } catch (ProblemException e) {
             other("payload " + name, "unreadable", e.problems().get(0).what());
         }
@@ -95,6 +125,37 @@ public final class ValueComparison {
                 cells(where, kept.columns().get(i), now.columns().get(i), row);
             }
         }
+    }
+
+    private void grids(String name, NpyPayload.NpyArray kept, NpyPayload.NpyArray now) {
+        if (kept.sort() != now.sort() || !Arrays.equals(kept.shape(), now.shape())) {
+            other(
+                    "payload " + name,
+                    kept.sort() + " " + Arrays.toString(kept.shape()),
+                    now.sort() + " " + Arrays.toString(now.shape()));
+            return;
+        }
+        double[] before = kept.reals();
+        double[] after = now.reals();
+        for (int i = 0; i < before.length; i++) {
+            String where = "payload " + name + ", value " + i;
+            if (Double.isNaN(before[i]) != Double.isNaN(after[i])) {
+                other(where, cell(before[i]), cell(after[i]));
+            } else if (!Double.isNaN(before[i])) {
+                numbers(where, before[i], after[i], OptionalDouble.empty());
+            }
+        }
+        long[] first = kept.integers();
+        long[] second = now.integers();
+        for (int i = 0; i < first.length; i++) {
+            if (first[i] != second[i]) {
+                other("payload " + name + ", value " + i, Long.toString(first[i]), Long.toString(second[i]));
+            }
+        }
+    }
+
+    private static String cell(double value) {
+        return Double.isNaN(value) ? "absent" : Double.toString(value);
     }
 
     private void cells(String where, CsvPayload.Column kept, CsvPayload.Column now, int row) {
@@ -124,7 +185,11 @@ public final class ValueComparison {
         } else if (kept instanceof JsonArray before && now instanceof JsonArray after) {
             arrays(pointer, before, after);
         } else if (kept instanceof JsonNumber before && now instanceof JsonNumber after) {
-            numbers(pointer, before.value(), after.value(), deviation);
+            if (integers.contains(pointer) && before.value() != after.value()) {
+                other(pointer, Double.toString(before.value()), Double.toString(after.value()));
+            } else {
+                numbers(pointer, before.value(), after.value(), deviation);
+            }
         } else if (!kept.equals(now)) {
             other(pointer, kept.toString(), now.toString());
         }
@@ -138,12 +203,12 @@ public final class ValueComparison {
             Optional<Json> after = now.get(name);
             if (before.isEmpty() || after.isEmpty()) {
                 other(
-                        pointer + "/" + name,
+                        JsonPointer.child(pointer, name),
                         before.map(Json::toString).orElse("absent"),
                         after.map(Json::toString).orElse("absent"));
             } else {
                 OptionalDouble u = name.equals("value") ? kept.number("u") : OptionalDouble.empty();
-                values(pointer + "/" + name, before.get(), after.get(), u);
+                values(JsonPointer.child(pointer, name), before.get(), after.get(), u);
             }
         }
     }

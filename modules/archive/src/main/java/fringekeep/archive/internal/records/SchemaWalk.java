@@ -6,11 +6,13 @@ import fringekeep.archive.json.JsonObject;
 import fringekeep.archive.json.JsonPointer;
 import fringekeep.archive.json.JsonText;
 import java.util.ArrayList;
+import java.util.HashSet;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.Set;
 
 /**
  * Walks a value along its schema and finds the places where the schema asks for a quantity or a moment. Branches of a choice that the
@@ -23,6 +25,7 @@ public final class SchemaWalk {
     private final JsonObject root;
     private final String definition;
     private final Map<String, Place> places = new LinkedHashMap<>();
+    private final Set<String> integers = new HashSet<>();
 
     private SchemaWalk(JsonObject root, String definition) {
         this.root = root;
@@ -39,6 +42,13 @@ public final class SchemaWalk {
         return places(schema, value, MOMENT);
     }
 
+    /** Pointers to the values that the schema calls integers. */
+    public static Set<String> integers(JsonObject schema, Json value) {
+        SchemaWalk walk = new SchemaWalk(schema, QUANTITY);
+        walk.visit(schema, value, "", 0);
+        return Set.copyOf(walk.integers);
+    }
+
     private static List<Place> places(JsonObject schema, Json value, String definition) {
         SchemaWalk walk = new SchemaWalk(schema, definition);
         walk.visit(schema, value, "", 0);
@@ -48,6 +58,9 @@ public final class SchemaWalk {
     private void visit(JsonObject schema, Json value, String pointer, int depth) {
         if (depth > DEEPEST) {
             return;
+        }
+        if (schema.text("type").equals(Optional.of("integer"))) {
+            integers.add(pointer);
         }
         Optional<String> reference = schema.text("$ref");
         if (reference.isPresent() && reference.get().endsWith(definition)) {
