@@ -23,10 +23,11 @@ public final class FringeBasis {
         this.n = positions.length;
         this.cosine = new double[n];
         this.sine = new double[n];
+        double[] pair = new double[2];
         for (int i = 0; i < n; i++) {
-            double turns = positions[i] / period;
-            cosine[i] = Turns.cos(turns);
-            sine[i] = Turns.sin(turns);
+            Turns.both(positions[i] / period, pair, 0);
+            cosine[i] = pair[0];
+            sine[i] = pair[1];
         }
     }
 

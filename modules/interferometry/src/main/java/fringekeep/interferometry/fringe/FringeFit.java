@@ -1,5 +1,6 @@
 package fringekeep.interferometry.fringe;
 
+import fringekeep.interferometry.statistics.AmplitudeLimits;
 import fringekeep.interferometry.statistics.Estimate;
 import fringekeep.interferometry.statistics.Interval;
 import fringekeep.interferometry.statistics.SymmetricMatrix;
@@ -189,6 +190,38 @@ public final class FringeFit implements FringeOutcome {
      */
     public Optional<Interval> phaseInterval(double level) {
         return values[0] > 0 ? FringeProfile.of(this).phase(level) : Optional.empty();
+    }
+
+    /**
+     * The visibility less its bias by noise, sqrt(max(0, V&sup2; &minus; s&sup2;)) with s the noise of the modulation in any
+     * one direction.
+     *
+     * @return corrected visibility with the standard error of the uncorrected one, empty where the mean is not positive
+     */
+    public Optional<Estimate> biasCorrectedVisibility() {
+        return visibility()
+                .map(estimate -> new Estimate(
+                        AmplitudeLimits.biasCorrected(
+                                estimate.value(), inside.widened().quadratureNoise()),
+                        estimate.standardUncertainty()));
+    }
+
+    /**
+     * Upper limit on the visibility by the Rice law: classical, or with a flat prior where the classical one would be 0.
+     *
+     * @param level confidence level, for example 0.95
+     * @return the limit, named for how it was made; empty where the mean is not positive
+     */
+    public Optional<UpperLimit> upperLimit(double level) {
+        return visibility().map(estimate -> {
+            double noise = inside.widened().quadratureNoise();
+            double classical = AmplitudeLimits.classicalUpperLimit(estimate.value(), noise, level);
+            if (classical > 0) {
+                return new UpperLimit(UpperLimit.Sort.CLASSICAL, level, classical);
+            }
+            double flat = AmplitudeLimits.flatPriorUpperLimit(estimate.value(), noise, level);
+            return new UpperLimit(UpperLimit.Sort.FLAT_PRIOR, level, flat);
+        });
     }
 
     /**

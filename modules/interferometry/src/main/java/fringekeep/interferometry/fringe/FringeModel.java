@@ -37,6 +37,7 @@ final class FringeModel {
     private final double[] time;
     private final DeadTime deadTime;
     private final double secondsPerExposure;
+    private final double[] pair = new double[2];
     private final double[] cosine;
     private final double[] sine;
     private final double[] cosineTwice;
@@ -137,8 +138,9 @@ final class FringeModel {
     private void fillTurns(double relativeFrequency) {
         for (int row = 0; row < points; row++) {
             double turn = turns[row] * (1 + relativeFrequency);
-            cosine[row] = Turns.cos(turn);
-            sine[row] = Turns.sin(turn);
+            Turns.both(turn, pair, 0);
+            cosine[row] = pair[0];
+            sine[row] = pair[1];
             if (harmonicAt >= 0) {
                 cosineTwice[row] = Turns.cos(2 * turn);
                 sineTwice[row] = Turns.sin(2 * turn);

@@ -1,5 +1,7 @@
 package fringekeep.interferometry.statistics;
 
+import org.apache.commons.math3.special.Gamma;
+
 /**
  * The deviance of Poisson counts, 2 [&mu; &minus; n + n ln(n / &mu;)], and its first moments.
  *
@@ -73,8 +75,30 @@ public final class PoissonDeviance {
         return new double[] {expected, square - expected * expected, withCount, second};
     }
 
-    private static double probability(int count, double mean) {
-        return StrictMath.exp(
-                count * StrictMath.log(mean) - mean - org.apache.commons.math3.special.Gamma.logGamma(count + 1.0));
+    /**
+     * The probability of n Poisson counts by the saddle-point form exp(&minus;d / 2 &minus; &delta;(n)) / sqrt(2 &pi; n), which
+     * keeps its digits at large means. Source: C. Loader, Fast and Accurate Computation of Binomial Probabilities (2000).
+     *
+     * @param count n, not negative
+     * @param mean &mu;, positive
+     * @return probability, relative error below 1e-14 up to means of 1e8
+     */
+    public static double probability(double count, double mean) {
+        if (count == 0) {
+            return StrictMath.exp(-mean);
+        }
+        double exponent = 0.5 * term(count, mean) + stirlingError(count);
+        return StrictMath.exp(-exponent) / Math.sqrt(2 * Math.PI * count);
+    }
+
+    /** ln n! less Stirling's formula: its series from 16 on, below by ln Gamma. */
+    private static double stirlingError(double n) {
+        if (n < 16) {
+            double stirling = 0.5 * StrictMath.log(2 * Math.PI * n) + n * StrictMath.log(n) - n;
+            return Gamma.logGamma(n + 1) - stirling;
+        }
+        double square = n * n;
+        return (1.0 / 12 - (1.0 / 360 - (1.0 / 1260 - (1.0 / 1680 - 1.0 / 1188 / square) / square) / square) / square)
+                / n;
     }
 }

@@ -1,14 +1,12 @@
 package fringekeep.interferometry.statistics;
 
-import org.apache.commons.math3.special.Gamma;
-
 /**
  * The Rice law: the length of a plane vector of true length v with independent normal noise 1 in both directions. A
  * fitted visibility of true value V with noise s in each quadrature follows it with v = V / s.
  *
  * <p>Source: S. O. Rice, Bell System Technical Journal 24, 46 (1945); the square is non-central &chi;&sup2; with two
- * degrees of freedom and is summed as a Poisson mixture. Absolute error below 1e-13 for v up to 1e4; above, the normal law
- * with the mean shifted by 1 / (2 v) is used (error below 1e-8).
+ * degrees of freedom and is summed as a Poisson mixture. Absolute error below 1e-12 for v up to 1e4; above, the normal law
+ * with the mean shifted by 1 / (2 v) is used (error below 1e-9).
  */
 public final class RiceDistribution {
     private static final double NORMAL_FROM = 1e4;
@@ -38,9 +36,9 @@ public final class RiceDistribution {
             return -StrictMath.expm1(-y);
         }
         int start = (int) Math.floor(half);
-        double weight = StrictMath.exp(start * StrictMath.log(half) - half - Gamma.logGamma(start + 1.0));
-        double step = StrictMath.exp((start + 1) * StrictMath.log(y) - y - Gamma.logGamma(start + 2.0));
-        double below = Gamma.regularizedGammaP(start + 1.0, y, 1e-15, 1_000_000);
+        double weight = PoissonDeviance.probability(start, half);
+        double step = PoissonDeviance.probability(start + 1.0, y);
+        double below = above(start, y, step);
         double sum = weight * below;
         double upWeight = weight;
         double upBelow = below;
@@ -61,6 +59,24 @@ public final class RiceDistribution {
             sum += downWeight * downBelow;
         }
         return Math.min(1, Math.max(0, sum));
+    }
+
+    /** Probability of more than k Poisson counts of mean y by summation away from the mode; next is that of k + 1. */
+    private static double above(int k, double y, double next) {
+        double sum = 0;
+        double term = next;
+        if (k + 1 > y) {
+            for (double m = k + 2; term > 1e-18 * next; m++) {
+                sum += term;
+                term *= y / m;
+            }
+            return sum;
+        }
+        for (double m = k + 1; m > 0 && term > 1e-18 * next; m--) {
+            term *= m / y;
+            sum += term;
+        }
+        return 1 - sum;
     }
 
     /**

@@ -70,4 +70,55 @@ class FringeBasisTest {
         assertThat(basis.poisson(new double[] {9, 0, 0, 0}, 0, result)).isFalse();
         assertThat(basis.poisson(new double[] {0, 0, 0, 0}, 0, result)).isFalse();
     }
+
+    @Test
+    void freePeriodAgreesWithTheGeneralFitter() {
+        Random random = new Random(2);
+        for (boolean drift : new boolean[] {false, true}) {
+            double[] positions = new double[40];
+            for (int i = 0; i < 40; i++) {
+                positions[i] = 0.3 + 0.05 * i;
+            }
+            FreePeriodScan fast = new FreePeriodScan(positions, 1.03, drift);
+            double[] result = new double[fast.resultLength()];
+            int compared = 0;
+            for (int k = 0; k < 300; k++) {
+                double[] counts = new double[40];
+                for (int i = 0; i < 40; i++) {
+                    double shape = 1 + 0.5 * StrictMath.cos(2 * Math.PI * positions[i] + k);
+                    counts[i] = SimulatedScans.poisson(random, 200 * shape);
+                }
+                FringeOutcome full = FringeFitter.fit(
+                        FringeData.of(positions, counts),
+                        FringeOptions.atPeriod(1.03)
+                                .estimator(Estimator.UNWEIGHTED)
+                                .periodFree(true)
+                                .driftOrder(drift ? 1 : 0));
+                if (fast.fit(counts, result) && full instanceof FringeFit fit) {
+                    compared++;
+                    for (int j = 0; j < fit.values().length; j++) {
+                        double sigma = Math.sqrt(fit.covariance()[j * (j + 1) / 2 + j]);
+                        assertThat(result[j]).isCloseTo(fit.values()[j], within(1e-7 * sigma));
+                    }
+                    assertThat(result[fit.values().length]).isCloseTo(fit.covariance()[0], within(1e-6 * result[0]));
+                }
+            }
+            assertThat(compared).isGreaterThanOrEqualTo(295);
+        }
+    }
+
+    @Test
+    void cosinesInTurnsKeepTheirDigits() {
+        double[] both = new double[2];
+        for (int k = -4000; k < 4000; k++) {
+            double turns = k / 1234.5;
+            double angle = 2 * Math.PI * (turns - Math.rint(turns));
+            Turns.both(turns, both, 0);
+            assertThat(Turns.cos(turns)).isCloseTo(StrictMath.cos(angle), within(1.5e-15));
+            assertThat(Turns.sin(turns)).isCloseTo(StrictMath.sin(angle), within(1.5e-15));
+            assertThat(both[0]).isEqualTo(Turns.cos(turns) + 0.0);
+            assertThat(both[1]).isEqualTo(Turns.sin(turns) + 0.0);
+            assertThat(both[0] * both[0] + both[1] * both[1]).isCloseTo(1, within(5e-16));
+        }
+    }
 }
