@@ -15,6 +15,7 @@ import fringekeep.archive.problem.ProblemException;
 import fringekeep.archive.quantity.Quantity;
 import fringekeep.archive.quantity.QuantityJson;
 import fringekeep.archive.quantity.QuantityText;
+import fringekeep.archive.quantity.Uncertainty;
 import fringekeep.archive.quantity.ValueText;
 import fringekeep.archive.record.PartName;
 import java.text.Normalizer;
@@ -23,6 +24,7 @@ import java.util.EnumMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.TreeMap;
 
 /** Reads the parts of a document: texts in normal form, quantities and moments from text. */
@@ -159,7 +161,7 @@ final class EnteredParts {
                                 quantity.text(),
                                 quantity.unit(),
                                 quantity.si(),
-                                new fringekeep.archive.quantity.Uncertainty.Exact())
+                                new Uncertainty.Exact())
                         : quantity);
     }
 
@@ -186,7 +188,7 @@ final class EnteredParts {
         }
     }
 
-    private static String end(java.util.OptionalDouble end) {
+    private static String end(OptionalDouble end) {
         return end.isPresent() ? ValueText.number(end.getAsDouble()) : "…";
     }
 

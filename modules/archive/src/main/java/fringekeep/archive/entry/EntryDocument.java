@@ -1,9 +1,11 @@
 package fringekeep.archive.entry;
 
 import fringekeep.archive.NewRecord;
+import fringekeep.archive.json.Json;
 import fringekeep.archive.json.JsonArray;
 import fringekeep.archive.json.JsonDocument;
 import fringekeep.archive.json.JsonObject;
+import fringekeep.archive.json.JsonPointer;
 import fringekeep.archive.json.JsonText;
 import fringekeep.archive.kind.RecordKind;
 import fringekeep.archive.problem.Problem;
@@ -20,6 +22,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import java.util.TreeSet;
 
 /**
  * Reads what a script or a form gives for a new record, collecting all that is wrong, each with JSON pointer, line and
@@ -31,13 +34,11 @@ public final class EntryDocument {
     private static final Set<String> MEMBERS = Set.of(
             "kind", "content", "choices", "identity", "remark", "person", "about", "inputs", "corrects", "after");
 
-    private final JsonDocument document;
     private final JsonObject object;
     private final EntrySurroundings surroundings;
     private final Trouble trouble;
 
     private EntryDocument(JsonDocument document, JsonObject object, EntrySurroundings surroundings) {
-        this.document = document;
         this.object = object;
         this.surroundings = surroundings;
         this.trouble = new Trouble(document);
@@ -97,10 +98,10 @@ public final class EntryDocument {
                 trouble.add(
                         "entry.unknown-member",
                         "An entry document has no member \"" + name + "\".",
-                        fringekeep.archive.json.JsonPointer.child("", name),
+                        JsonPointer.child("", name),
                         name.equals("result")
                                 ? "Results are computed, never entered."
-                                : "Use: " + String.join(", ", new java.util.TreeSet<>(MEMBERS)) + ".");
+                                : "Use: " + String.join(", ", new TreeSet<>(MEMBERS)) + ".");
             }
         }
     }
@@ -135,11 +136,7 @@ public final class EntryDocument {
         return object.array(name);
     }
 
-    JsonDocument document() {
-        return document;
-    }
-
-    static Optional<String> text(fringekeep.archive.json.Json value) {
+    static Optional<String> text(Json value) {
         return value instanceof JsonText text ? Optional.of(text.value()) : Optional.empty();
     }
 }

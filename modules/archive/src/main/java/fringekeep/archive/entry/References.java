@@ -20,6 +20,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.OptionalLong;
 import java.util.Set;
+import java.util.TreeSet;
 
 /** Reads what a document refers to. */
 final class References {
@@ -175,7 +176,7 @@ final class References {
                         "entry.unknown-member",
                         "There is no member \"" + name + "\" here.",
                         JsonPointer.child(pointer, name),
-                        "Use: " + String.join(", ", new java.util.TreeSet<>(known)) + ".");
+                        "Use: " + String.join(", ", new TreeSet<>(known)) + ".");
             }
         }
         return Optional.of(object);

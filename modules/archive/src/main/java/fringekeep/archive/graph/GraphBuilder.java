@@ -8,6 +8,7 @@ import fringekeep.archive.record.After;
 import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.Head;
 import fringekeep.archive.record.InputReference;
+import fringekeep.archive.record.PartName;
 import java.time.DateTimeException;
 import java.time.Instant;
 import java.util.Optional;
@@ -70,7 +71,7 @@ public final class GraphBuilder {
     public void add(long n, RecordView record) {
         boolean judgement = record.head().kind().text().equals(GraphData.JUDGEMENT);
         Optional<JsonObject> content =
-                judgement ? record.part(fringekeep.archive.record.PartName.CONTENT) : Optional.empty();
+                judgement ? record.part(PartName.CONTENT) : Optional.empty();
         add(n, record.head(), record.fingerprint(), content, scanStart(record.result()));
     }
 

@@ -29,7 +29,7 @@ final class PartRules {
                         part.getValue(), JsonPointer.child("", part.getKey().text()))));
         if (problems.isEmpty()) {
             JsonObject body = body(record.parts());
-            problems.addAll(schemas.examine(kind.jsonSchema(kind.schema()), body));
+            problems.addAll(schemas.examine(kind, body));
             if (problems.isEmpty()) {
                 problems.addAll(quantities(kind.jsonSchema(kind.schema()), body));
             }
@@ -43,7 +43,7 @@ final class PartRules {
         String pointer = JsonPointer.child("", PartName.CHOICES.text());
         List<Problem> problems = new ArrayList<>(CanonicalJson.examine(choices, pointer));
         if (problems.isEmpty()) {
-            schemas.examine(kind.jsonSchema(kind.schema()), body).stream()
+            schemas.examine(kind, body).stream()
                     .filter(problem -> problem.where().startsWith(pointer))
                     .forEach(problems::add);
         }

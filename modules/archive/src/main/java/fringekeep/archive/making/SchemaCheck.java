@@ -4,7 +4,6 @@ import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
-import com.networknt.schema.InputFormat;
 import com.networknt.schema.JsonMetaSchema;
 import com.networknt.schema.JsonSchema;
 import com.networknt.schema.JsonSchemaFactory;
@@ -20,6 +19,7 @@ import fringekeep.archive.json.JsonBoolean;
 import fringekeep.archive.json.JsonNumber;
 import fringekeep.archive.json.JsonObject;
 import fringekeep.archive.json.JsonText;
+import fringekeep.archive.kind.RecordKind;
 import fringekeep.archive.kind.SchemaResource;
 import fringekeep.archive.problem.Problem;
 import java.util.LinkedHashSet;
@@ -37,7 +37,7 @@ final class SchemaCheck {
     private static final int MOST_PROBLEMS = 100;
     private static final JsonNodeFactory NODES = JsonNodeFactory.instance;
 
-    private final Map<JsonObject, JsonSchema> compiled = new ConcurrentHashMap<>();
+    private final Map<String, JsonSchema> compiled = new ConcurrentHashMap<>();
     private final JsonSchemaFactory factory;
     private final SchemaValidatorsConfig configuration;
 
@@ -58,9 +58,11 @@ final class SchemaCheck {
                 .build();
     }
 
-    List<Problem> examine(JsonObject schema, JsonObject value) {
-        Set<ValidationMessage> messages = compiled.computeIfAbsent(schema, this::compile)
-                .validate(node(value).toString(), InputFormat.JSON);
+    /** What is wrong with the parts of a record of a kind, by the schema number the kind writes. */
+    List<Problem> examine(RecordKind kind, JsonObject value) {
+        JsonSchema schema = compiled.computeIfAbsent(
+                kind.kind() + "/" + kind.schema(), key -> compile(kind.jsonSchema(kind.schema())));
+        Set<ValidationMessage> messages = schema.validate(node(value));
         Set<Problem> problems = new LinkedHashSet<>();
         messages.stream().limit(MOST_PROBLEMS).map(SchemaCheck::problem).forEach(problems::add);
         return List.copyOf(problems);

@@ -3,6 +3,8 @@ package fringekeep.archive.quantity;
 import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
 import java.math.BigDecimal;
+import java.math.BigInteger;
+import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.regex.Matcher;
@@ -101,7 +103,7 @@ public final class QuantityText {
 
     private static Uncertainty spread(String spread, String power, Unit unit) throws ProblemException {
         boolean ownPower = spread.matches(".*[eE].*");
-        return stated(decimal(spread).toLowerCase(java.util.Locale.ROOT) + (ownPower ? "" : power), unit);
+        return stated(decimal(spread).toLowerCase(Locale.ROOT) + (ownPower ? "" : power), unit);
     }
 
     private static String inLastDigits(String last, String number) {
@@ -110,7 +112,7 @@ public final class QuantityText {
         }
         int point = number.indexOf('.');
         int decimals = point < 0 ? 0 : number.length() - point - 1;
-        return new BigDecimal(new java.math.BigInteger(last), decimals).toPlainString();
+        return new BigDecimal(new BigInteger(last), decimals).toPlainString();
     }
 
     private static OptionalDouble bound(String text, Unit unit) throws ProblemException {

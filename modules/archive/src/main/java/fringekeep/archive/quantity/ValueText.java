@@ -3,6 +3,7 @@ package fringekeep.archive.quantity;
 import java.math.BigDecimal;
 import java.math.MathContext;
 import java.math.RoundingMode;
+import java.util.OptionalDouble;
 
 /**
  * Numbers as people read them: two digits of the standard uncertainty in brackets behind the value, a true minus (U+2212),
@@ -96,7 +97,7 @@ public final class ValueText {
         return dressed(text) + " ± " + dressed(deviation);
     }
 
-    private static String bound(java.util.OptionalDouble si, Quantity quantity) {
+    private static String bound(OptionalDouble si, Quantity quantity) {
         return si.isEmpty() ? "" : number(Units.of(quantity.unit()).fromSi(si.getAsDouble()));
     }
 
