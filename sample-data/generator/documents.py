@@ -25,8 +25,7 @@ FLIGHT_WINDOWS = {"fan, day 1": ("55 m/s", "150 m/s"), "vane, day 2": ("85 m/s",
                   "fan, day 4": ("55 m/s", "150 m/s"), "cluster, day 4": ("78 m/s", "155 m/s")}
 
 
-CLUSTER_SIZES = ((286, 0.020), (290, 0.135), (294, 0.487), (298, 0.923), (302, 0.923), (306, 0.487), (310, 0.135),
-                 (314, 0.020))
+CLUSTER_SIZES = ((288, 0.056), (294, 0.487), (300, 1.0), (306, 0.487), (312, 0.056))
 
 
 class Script:
@@ -85,7 +84,7 @@ def substances(script):
              "sort": "cluster", "unit": "Y", "sizes": {"sort": "list", "shares": [
                  {"size": size, "share": share} for size, share in CLUSTER_SIZES]},
              "window": {"from": "25300 u", "to": "28000 u"}}},
-         "remark": "Sizes behind the mass filter, in steps of four atoms, as a scan of the filter showed them."})
+         "remark": "Sizes behind the mass filter, in steps of six atoms, as a scan of the filter showed them."})
     received = moment(datetime(2031, 9, 22, 9, 30, tzinfo=timezone.utc))
     script.record(
         {"kind": "batch", "about": [{"role": "compound", "record": "compound 1"}],
@@ -463,6 +462,7 @@ def results(script, judgements):
             "source": "Invented for the demo lab; no such calculation exists.", "conditions": "532 nm"}})
     properties(script)
     figure(script)
+    statements(script)
 
 
 def properties(script):
@@ -486,13 +486,12 @@ def figure(script):
                  "stroke": "dashed"},
                 {"input": place, "series": "points", "label": "measured", "tone": "ink", "shape": "dot"}]
 
-    power = {"label": "laser power", "unit": "W", "from": 0}
     visibility = {"label": "visibility", "unit": "1", "from": 0}
-    panels = [{"name": name, "heading": heading, "legend": name == "a", "x": power, "y": visibility,
-               "series": curves(place)}
-              for name, heading, place in (("a", "demo fan, first night", 0),
-                                           ("b", "demo vane, short of the first maximum", 2),
-                                           ("c", "yttrium clusters", 3))]
+    panels = [{"name": name, "heading": heading, "legend": name == "a", "y": visibility,
+               "x": {"label": "laser power", "unit": "W", "from": 0, "to": greatest}, "series": curves(place)}
+              for name, heading, place, greatest in (("a", "demo fan, first night", 0, 4.2),
+                                                     ("b", "demo vane, short of the first maximum", 2, 2.6),
+                                                     ("c", "yttrium clusters", 3, 1.1))]
     panels.append({"name": "d", "heading": "polarizability volume of demo fan", "legend": True,
                    "x": {"label": "night", "unit": "1", "from": 0, "to": 4},
                    "y": {"label": "polarizability volume", "unit": "Ao3"}, "series": [
@@ -509,6 +508,15 @@ def figure(script):
                     "caption": "Invented data of the demo lab. Visibility against laser power with both descriptions, "
                                "and the polarizability volume of demo fan on two nights beside a calculated value.",
                     "widthMillimetres": 170, "heightMillimetres": 130, "panelsInRow": 2, "panels": panels}})
+
+
+def statements(script):
+    """Numbers as printed in the lab's invented paper."""
+    script.record(*[{"kind": "statement", "inputs": [{"role": "of", "record": record}], "content": {
+        "pointer": "/polarizabilityVolume", "printed": printed, "unit": "Ao3", "uncertainty": "combined",
+        "rounding": {"sort": "decimals", "digits": 0}, "where": where}}
+        for record, printed, where in (("property 1", "420(7)", "abstract of an invented paper"),
+                                       ("property 3", "167(4)", "table 2 of an invented paper"))])
 
 
 def select(script, name, judgements):
