@@ -9,8 +9,8 @@ import java.util.List;
  *
  * <p>Rows run along the grating slits (the direction of fall), columns across the orders. Steps: pixels far above the
  * median of their eight neighbours are hot and left out; the background is a plane through the medians of the four
- * corners' blocks; each row is moved by the tilt; the rest of each column is summed. The uncertainty of a bin is that of
- * its own counts (gain times signal plus read noise per pixel). Thread rule: immutable.
+ * corners' blocks; each row is moved by the tilt; the rest of each column is summed. The uncertainty of a bin is that
+ * of its own counts (gain times signal plus read noise per pixel). Thread rule: immutable.
  */
 public final class CameraImage {
     private final double[][] pixels;
@@ -45,7 +45,8 @@ public final class CameraImage {
      * @param firstRow    first row summed
      * @param lastRow     last row summed, included
      * @param tilt        columns by which the pattern moves per row (dx/drow), linear interpolation between pixels
-     * @param hotDeviates a pixel that exceeds the median of its neighbours by this many of its standard deviations is hot
+     * @param hotDeviates a pixel that exceeds the median of its neighbours by this many of its standard deviations is
+     *     hot
      * @param gain        variance per signal unit (1 for photon counts)
      * @param readNoise   standard deviation of an empty pixel, &gt; 0
      * @param corner      side of the corner blocks that hold background only (pixels), &ge; 1

@@ -9,9 +9,10 @@ import java.util.function.DoubleUnaryOperator;
  * (0 at normal, -1/2 at Bragg incidence).
  *
  * <p>Thin gratings give |a_n|&sup2; = J_n&sup2;(&phi;0/2), thick ones at Bragg incidence sin&sup2;(&phi;0/4) in the
- * reflected order. Each time step is a fourth-order commutator-free pair of exponentials of the tridiagonal Hamiltonian,
- * each summed as its Taylor series to rounding; the norm is kept to 1e-13. For a constant rate the result is exact to
- * rounding whatever the steps. Source of the stepping: S. Blanes, P. C. Moan, Appl. Numer. Math. 56, 1519 (2006).
+ * reflected order. Each time step is a fourth-order commutator-free pair of exponentials of the tridiagonal
+ * Hamiltonian, each summed as its Taylor series to rounding; the norm is kept to 1e-13. For a constant rate the
+ * result is exact to rounding whatever the steps. Source of the stepping: S. Blanes, P. C. Moan, Appl. Numer. Math.
+ * 56, 1519 (2006).
  *
  * <p>Thread rule: immutable.
  *

@@ -50,8 +50,8 @@ public final class Diffraction {
     }
 
     /**
-     * Klein-Cook parameter: well below one the grating is thin (Raman-Nath), well above one it is thick (Bragg), as long
-     * as its phase is of order one.
+     * Klein-Cook parameter: well below one the grating is thin (Raman-Nath), well above one it is thick (Bragg), as
+     * long as its phase is of order one.
      *
      * @param wavelength de Broglie wavelength (m)
      * @param thickness  length of the grating along the beam (m)

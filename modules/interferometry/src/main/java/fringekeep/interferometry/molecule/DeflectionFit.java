@@ -2,7 +2,6 @@ package fringekeep.interferometry.molecule;
 
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Locale;
 import java.util.Optional;
 
 /**
@@ -144,10 +143,8 @@ public record DeflectionFit(double phasePerSusceptibility, double lowest, double
             if (excess < NEARBY && Math.abs(other.susceptibility - value) > apart) {
                 warnings.add(new FitWarning(
                         FitWarning.Sort.AMBIGUOUS_PHASE,
-                        String.format(
-                                Locale.ROOT,
-                                "a susceptibility of %.5g, phases unwrapped otherwise, fits almost as well (chi-square larger by"
-                                        + " %.3g); add field strengths in between",
+                        Rounded.words("a susceptibility of {5}, phases unwrapped otherwise, fits almost as well (chi-square"
+                                        + " larger by {3}); add field strengths in between",
                                 other.susceptibility,
                                 excess)));
             }
@@ -155,9 +152,7 @@ public record DeflectionFit(double phasePerSusceptibility, double lowest, double
         if (fit.pValue() < 1e-3) {
             warnings.add(new FitWarning(
                     FitWarning.Sort.POOR_FIT,
-                    String.format(
-                            Locale.ROOT,
-                            "chi-square %.4g at %d degrees of freedom",
+                    Rounded.words("chi-square {4} at {} degrees of freedom",
                             fit.chiSquare(),
                             data.size() - 2)));
         }

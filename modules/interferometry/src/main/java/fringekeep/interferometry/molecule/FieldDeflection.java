@@ -47,8 +47,8 @@ public record FieldDeflection(double separation, double start, double length, do
     /**
      * Displacement of the fringe.
      *
-     * @param susceptibility electric susceptibility &chi; = &alpha; + &lt;d&sup2;&gt;/(3kT) (C m^2/V) with the field term
-     *     (E.grad)E, or magnetic susceptibility (J/T^2) with (B.grad)B
+     * @param susceptibility electric susceptibility &chi; = &alpha; + &lt;d&sup2;&gt;/(3kT) (C m^2/V) with the field
+     *     term (E.grad)E, or magnetic susceptibility (J/T^2) with (B.grad)B
      * @param fieldTerm      (E.grad)E (V^2/m^3) or (B.grad)B (T^2/m)
      * @param mass           mass (kg)
      * @param velocity       speed (m/s)

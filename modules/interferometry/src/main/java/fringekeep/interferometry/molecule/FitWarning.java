@@ -11,6 +11,8 @@ public record FitWarning(Sort sort, String words) {
     public enum Sort {
         /** Visibility factor and polarizability are almost interchangeable in these data. */
         FACTOR_AND_POLARIZABILITY_DEGENERATE,
+        /** Two other parameters are almost interchangeable in these data. */
+        PARAMETERS_DEGENERATE,
         /** Another value describes the data almost as well. */
         SEVERAL_MINIMA,
         /** The data scatter more than their uncertainties allow. */

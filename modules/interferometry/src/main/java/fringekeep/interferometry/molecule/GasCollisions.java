@@ -8,11 +8,11 @@ import java.util.List;
 /**
  * Collisions with residual gas: effective cross section from visibility against pressure, and its prediction.
  *
- * <p>V = V0 exp(-p/p0), p0 = kT/(l &sigma;_eff), l the path from first to last grating (2L for equal separations), every
- * collision taking the molecule out of the fringe: K. Hornberger et al., Phys. Rev. Lett. 90, 160401 (2003).
+ * <p>V = V0 exp(-p/p0), p0 = kT/(l &sigma;_eff), l the path from first to last grating (2L for equal separations),
+ * every collision taking the molecule out of the fringe: K. Hornberger et al., Phys. Rev. Lett. 90, 160401 (2003).
  */
 public final class GasCollisions {
-    /** 2&pi; &Gamma;(3/5) cos(&pi;/5) (3&pi;/8)^(2/5): total cross section for an r^-6 potential in phase-shift form. */
+    /** 2&pi; &Gamma;(3/5) cos(&pi;/5) (3&pi;/8)^(2/5), of the total cross section for an r^-6 potential. */
     private static final double R6_PREFACTOR = 2.0
             * Math.PI
             * 1.4891922488128171

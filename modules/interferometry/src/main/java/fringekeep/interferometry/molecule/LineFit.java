@@ -17,7 +17,7 @@ final class LineFit implements CurveModel {
     /** Empty if the places do not determine both parameters. */
     static Optional<PropertyFit> fit(MeasuredCurve data, DoubleUnaryOperator abscissa, List<Parameter> parameters) {
         LineFit line = new LineFit(data, abscissa);
-        CurveFitter fitter = new CurveFitter(line, data);
+        KinkedCurveFitter fitter = new KinkedCurveFitter(line, data);
         double[] start = {0.0, 0.0};
         Optional<double[]> covariance = fitter.covariance(start);
         if (covariance.isEmpty()) {

@@ -14,8 +14,8 @@ import java.util.function.DoubleUnaryOperator;
  * <ul>
  *   <li>momentum kicks of width &sigma;_q at coherence time &tau;: &Gamma; = (m/m_e)&sup2;/&tau;,
  *       g = exp[-(&sigma;_q s/&#x127;)&sup2;/2];
- *   <li>spontaneous localisation of length r_c at rate &lambda; for one atomic mass unit: &Gamma; = &lambda; (m/u)&sup2;,
- *       g = exp[-s&sup2;/(4 r_c&sup2;)].
+ *   <li>spontaneous localisation of length r_c at rate &lambda; for one atomic mass unit: &Gamma; = &lambda;
+ *       (m/u)&sup2;, g = exp[-s&sup2;/(4 r_c&sup2;)].
  * </ul>
  * Written from memory of the literature ({@link #STANDING}).
  *

@@ -9,8 +9,8 @@ import java.util.List;
  * Cross section for removal from the beam by one photon, from the transmission against laser power or fluence.
  *
  * <p>Transmission = T0 &lt;exp(-&sigma; g)&gt;, g the photons per area a molecule meets: for a running Gaussian beam
- * &radic;(2/&pi;) &lambda; P e^(-2y&sup2;/w&sup2;)/(h c w v), for a pulse &lambda; F/(hc). Averages over speed and height
- * are taken of the transmission, not of its exponent.
+ * &radic;(2/&pi;) &lambda; P e^(-2y&sup2;/w&sup2;)/(h c w v), for a pulse &lambda; F/(hc). Averages over speed and
+ * height are taken of the transmission, not of its exponent.
  */
 public final class PhotoDepletion {
     private PhotoDepletion() {}

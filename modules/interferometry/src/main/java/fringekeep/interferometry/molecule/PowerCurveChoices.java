@@ -10,8 +10,8 @@ import java.util.Optional;
  * @param crossSection        its value if it is not (m^2), &ge; 0; zero means no absorption
  * @param fitFactor           whether the remaining visibility factor is fitted
  * @param factor              its value if it is not
- * @param lowest              lower end of the search for the polarizability volume (m^3); zero chooses it from the data's
- *     largest power (mean grating argument 0.05)
+ * @param lowest              lower end of the search for the polarizability volume (m^3); zero chooses it from the
+ *     data's largest power (mean grating argument 0.05)
  * @param highest             upper end (m^3); zero chooses it likewise (mean grating argument 40)
  * @param known               independently known polarizability volume (m^3), which then counts as one more data point
  * @param decisionThreshold   smallest |difference of ln L| at which one description is preferred; ln 100 by default

@@ -1,16 +1,15 @@
 package fringekeep.interferometry.molecule;
 
 import fringekeep.interferometry.nearfield.Description;
-import java.util.Locale;
 
 /**
  * Quantum against classical description of the same visibilities, with the answer "these data cannot tell".
  *
  * <p>Both are fitted with the same free parameters. Before the likelihoods are compared, each description is asked how
  * well it imitates the fitted curve of the other at the measured powers with the stated uncertainties: half the best
- * chi-square against a noise-free curve is the difference of ln L that such data can be expected to show. At one speed a
- * pure phase grating gives identical curves (the polarizability takes up the factor sin(&pi;r)/(&pi;r)), and nothing can
- * be told however small the uncertainties.
+ * chi-square against a noise-free curve is the difference of ln L that such data can be expected to show. At one
+ * speed a pure phase grating gives identical curves (the polarizability takes up the factor sin(&pi;r)/(&pi;r)), and
+ * nothing can be told however small the uncertainties.
  *
  * @param quantum             fit with matter waves
  * @param classical           fit with point particles
@@ -87,7 +86,7 @@ public record PowerCurveComparison(
         return ratio > 0.0 ? Verdict.QUANTUM : Verdict.CLASSICAL;
     }
 
-    /** How well the other description follows the fitted curve: half the smallest chi-square, infinite if not at all. */
+    /** How well the other description follows the fitted curve: half the smallest chi-square, or infinite. */
     private static double imitation(PowerCurveFitter fitter, MeasuredCurve data, PropertyFit truth, Description other) {
         double[] curve = new double[data.size()];
         System.arraycopy(truth.fitted(), 0, curve, 0, curve.length);
@@ -97,9 +96,7 @@ public record PowerCurveComparison(
 
     private static String reason(
             Verdict verdict, double ratio, double ifQuantum, double ifClassical, double threshold) {
-        String numbers = String.format(
-                Locale.ROOT,
-                "ln L differs by %.3g, %.3g was to be expected if quantum, %.3g if classical, %.3g is asked for",
+        String numbers = Rounded.words("ln L differs by {3}, {3} was to be expected if quantum, {3} if classical, {3} is asked for",
                 ratio,
                 ifQuantum,
                 ifClassical,

@@ -8,7 +8,6 @@ import fringekeep.interferometry.statistics.Estimate;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
-import java.util.Locale;
 import java.util.Optional;
 import java.util.function.DoubleUnaryOperator;
 
@@ -89,23 +88,25 @@ public record PowerCurveFitter(PowerSeriesSetup setup, BeamEnsemble ensemble, Po
     }
 
     private FitOutcome search(PowerCurveModel model, double perVolume) {
-        CurveFitter fitter = new CurveFitter(model, model.data());
-        List<CurveFitter.Minimum> minima = new ArrayList<>();
+        KinkedCurveFitter fitter = new KinkedCurveFitter(model, model.data());
+        List<KinkedCurveFitter.Minimum> minima = new ArrayList<>();
         for (double[] start : starts(model, perVolume)) {
             fitter.minimum(start).filter(found -> found.parameters()[0] > 0.0).ifPresent(found -> keep(minima, found));
         }
-        minima.sort(Comparator.comparingDouble(CurveFitter.Minimum::chiSquare));
+        minima.sort(Comparator.comparingDouble(KinkedCurveFitter.Minimum::chiSquare));
         if (minima.isEmpty()) {
             return new FitRefused(
                     FitRefused.Reason.NOT_CONVERGED,
-                    "no minimum was found for a polarizability volume from " + lowest(perVolume) + " to "
-                            + highest(perVolume) + " m^3: check powers, speeds and waist");
+                    Rounded.words(
+                            "no minimum was found for a polarizability volume from {4} to {4} m^3: check powers, speeds and waist",
+                            lowest(perVolume),
+                            highest(perVolume)));
         }
         return finished(model, fitter, minima, perVolume);
     }
 
-    private static void keep(List<CurveFitter.Minimum> minima, CurveFitter.Minimum found) {
-        for (CurveFitter.Minimum known : minima) {
+    private static void keep(List<KinkedCurveFitter.Minimum> minima, KinkedCurveFitter.Minimum found) {
+        for (KinkedCurveFitter.Minimum known : minima) {
             if (Math.abs(known.parameters()[0] - found.parameters()[0]) < 1e-5 * known.parameters()[0]) {
                 return;
             }
@@ -196,8 +197,8 @@ public record PowerCurveFitter(PowerSeriesSetup setup, BeamEnsemble ensemble, Po
     }
 
     private FitOutcome finished(
-            PowerCurveModel model, CurveFitter fitter, List<CurveFitter.Minimum> minima, double perVolume) {
-        CurveFitter.Minimum best = minima.get(0);
+            PowerCurveModel model, KinkedCurveFitter fitter, List<KinkedCurveFitter.Minimum> minima, double perVolume) {
+        KinkedCurveFitter.Minimum best = minima.get(0);
         Optional<double[]> covariance = fitter.covariance(best.parameters());
         if (covariance.isEmpty()) {
             return new FitRefused(
@@ -211,15 +212,15 @@ public record PowerCurveFitter(PowerSeriesSetup setup, BeamEnsemble ensemble, Po
         return fit.withWarnings(warnings(fit, minima, perVolume));
     }
 
-    private List<FitWarning> warnings(PropertyFit fit, List<CurveFitter.Minimum> minima, double perVolume) {
+    private List<FitWarning> warnings(PropertyFit fit, List<KinkedCurveFitter.Minimum> minima, double perVolume) {
         List<FitWarning> warnings = new ArrayList<>();
         warnAboutFactor(fit, perVolume, warnings);
         warnAboutOtherMinima(minima, warnings);
         if (fit.pValue() < POOR) {
             warnings.add(new FitWarning(
                     FitWarning.Sort.POOR_FIT,
-                    words(
-                            "chi-square %.4g at %d degrees of freedom (p = %.2g): the uncertainties do not cover the scatter",
+                    Rounded.words(
+                            "chi-square {4} at {} degrees of freedom (p = {2}): more scatter than stated",
                             fit.chiSquare(), fit.degreesOfFreedom(), fit.pValue())));
         }
         if (!minima.get(0).smooth()) {
@@ -231,7 +232,7 @@ public record PowerCurveFitter(PowerSeriesSetup setup, BeamEnsemble ensemble, Po
         if (volume < lowest(perVolume) || volume > highest(perVolume)) {
             warnings.add(new FitWarning(
                     FitWarning.Sort.AT_SEARCH_LIMIT,
-                    words("the polarizability volume %.4g m^3 lies outside the search range", volume)));
+                    Rounded.words("the polarizability volume {4} m^3 lies outside the search range", volume)));
         }
         return warnings;
     }
@@ -243,6 +244,7 @@ public record PowerCurveFitter(PowerSeriesSetup setup, BeamEnsemble ensemble, Po
                     FitWarning.Sort.NEGATIVE_VALUE,
                     "the absorption cross section came out negative; quote an upper limit"));
         }
+        warnAboutCrossSection(fit, warnings);
         if (!fit.has(Parameter.VISIBILITY_FACTOR)) {
             return;
         }
@@ -252,31 +254,41 @@ public record PowerCurveFitter(PowerSeriesSetup setup, BeamEnsemble ensemble, Po
             String reach = argument < FIRST_MAXIMUM ? "; the curve does not reach its first maximum" : "";
             warnings.add(new FitWarning(
                     FitWarning.Sort.FACTOR_AND_POLARIZABILITY_DEGENERATE,
-                    words("factor and polarizability are correlated by %.3f%s", correlation, reach)));
+                    Rounded.words("factor and polarizability are correlated by {3}{}", correlation, reach)));
         }
         Estimate factor = fit.estimate(Parameter.VISIBILITY_FACTOR);
         if (factor.value() > 1.0 + 2.0 * factor.standardUncertainty()) {
             warnings.add(new FitWarning(
                     FitWarning.Sort.FACTOR_ABOVE_ONE,
-                    words("the visibility factor is %.4g, more than an ideal instrument gives", factor.value())));
+                    Rounded.words("the visibility factor is {4}, more than an ideal instrument gives", factor.value())));
         }
     }
 
-    private static void warnAboutOtherMinima(List<CurveFitter.Minimum> minima, List<FitWarning> warnings) {
-        for (CurveFitter.Minimum other : minima.subList(1, minima.size())) {
-            double excess = other.chiSquare() - minima.get(0).chiSquare();
-            if (excess < NEARBY) {
+    private static void warnAboutCrossSection(PropertyFit fit, List<FitWarning> warnings) {
+        if (!fit.has(Parameter.ABSORPTION_CROSS_SECTION)) {
+            return;
+        }
+        for (Parameter other : fit.parameters()) {
+            double correlation = fit.correlation(Parameter.ABSORPTION_CROSS_SECTION, other);
+            if (other != Parameter.ABSORPTION_CROSS_SECTION && Math.abs(correlation) > 0.9) {
                 warnings.add(new FitWarning(
-                        FitWarning.Sort.SEVERAL_MINIMA,
-                        words(
-                                "a polarizability volume of %.5g m^3 fits almost as well (chi-square larger by %.3g)",
-                                other.parameters()[0], excess)));
+                        FitWarning.Sort.PARAMETERS_DEGENERATE,
+                        Rounded.words("absorption cross section and {} are correlated by {3}", other, correlation)));
             }
         }
     }
 
-    private static String words(String format, Object... values) {
-        return String.format(Locale.ROOT, format, values);
+    private static void warnAboutOtherMinima(List<KinkedCurveFitter.Minimum> minima, List<FitWarning> warnings) {
+        for (KinkedCurveFitter.Minimum other : minima.subList(1, minima.size())) {
+            double excess = other.chiSquare() - minima.get(0).chiSquare();
+            if (excess < NEARBY) {
+                warnings.add(new FitWarning(
+                        FitWarning.Sort.SEVERAL_MINIMA,
+                        Rounded.words(
+                                "a polarizability volume of {5} m^3 fits almost as well (chi-square larger by {3})",
+                                other.parameters()[0], excess)));
+            }
+        }
     }
 
     /** The solver's view of the same question, for profiles and resampling near a known answer. */

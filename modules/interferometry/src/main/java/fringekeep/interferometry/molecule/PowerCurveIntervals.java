@@ -27,7 +27,7 @@ public record PowerCurveIntervals(
      */
     public Interval profile(Parameter parameter, double level) {
         PowerCurveModel model = fitter.near(data, description, fit.values());
-        CurveFitter.Minimum best = new CurveFitter.Minimum(fit.values(), fit.chiSquare(), true);
+        KinkedCurveFitter.Minimum best = new KinkedCurveFitter.Minimum(fit.values(), fit.chiSquare(), true);
         int index = fit.parameters().indexOf(parameter);
         double uncertainty = fit.estimate(parameter).standardUncertainty();
         return new ProfileSearch(model, model.data(), best, index).interval(level, uncertainty);
@@ -56,7 +56,8 @@ public record PowerCurveIntervals(
             double[][] central95) {}
 
     /**
-     * Parametric bootstrap: the fitted curve with normal deviates of the data's uncertainties, fitted again from the fit.
+     * Parametric bootstrap: the fitted curve with normal deviates of the data's uncertainties, fitted again from the
+     * fit.
      *
      * @param seed      seed of {@link SplitMix64}; the same seed gives the same bits
      * @param resamples number of resamples, &ge; 100
@@ -72,7 +73,7 @@ public record PowerCurveIntervals(
         int good = 0;
         for (int r = 0; r < resamples; r++) {
             MeasuredCurve sample = resampled(model.data(), random);
-            Optional<CurveFitter.Minimum> minimum = new CurveFitter(model, sample).minimum(fit.values());
+            Optional<KinkedCurveFitter.Minimum> minimum = new KinkedCurveFitter(model, sample).minimum(fit.values());
             if (minimum.isPresent()) {
                 for (int k = 0; k < found.length; k++) {
                     found[k][good] = minimum.get().parameters()[k];

@@ -6,11 +6,11 @@ import fringekeep.interferometry.statistics.ScalarSearch;
 import java.util.Optional;
 
 /**
- * Profile-likelihood intervals: where the weighted sum of squares, minimised over all other parameters, has risen by the
- * square of the normal deviate of the level.
+ * Profile-likelihood intervals: where the weighted sum of squares, minimised over all other parameters, has risen by
+ * the square of the normal deviate of the level.
  *
- * <p>Source: G. Cowan, Statistical Data Analysis (1998), section 9.7; the rise is exact for Gaussian data and asymptotic
- * for a curved model.
+ * <p>Source: G. Cowan, Statistical Data Analysis (1998), section 9.7; the rise is exact for Gaussian data and
+ * asymptotic for a curved model.
  */
 final class ProfileSearch {
     private static final int MOST_DOUBLINGS = 40;
@@ -22,7 +22,7 @@ final class ProfileSearch {
     private final int index;
     private double[] others;
 
-    ProfileSearch(CurveModel model, MeasuredCurve data, CurveFitter.Minimum best, int index) {
+    ProfileSearch(CurveModel model, MeasuredCurve data, KinkedCurveFitter.Minimum best, int index) {
         this.model = model;
         this.data = data;
         this.best = best.parameters();
@@ -61,8 +61,8 @@ final class ProfileSearch {
             double[] one = {value};
             return squareAt(one) - lowestSquare;
         }
-        CurveFitter fitter = new CurveFitter(new Held(value), data);
-        Optional<CurveFitter.Minimum> minimum = fitter.minimum(others);
+        KinkedCurveFitter fitter = new KinkedCurveFitter(new Held(value), data);
+        Optional<KinkedCurveFitter.Minimum> minimum = fitter.minimum(others);
         if (minimum.isEmpty()) {
             return Double.POSITIVE_INFINITY;
         }

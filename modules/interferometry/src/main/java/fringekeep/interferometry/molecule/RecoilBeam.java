@@ -13,8 +13,8 @@ import java.util.Optional;
  *
  * <p>At distance D from the nearer outer grating one photon moves the fringe by the phase
  * &theta; = 2&pi; D &lambda;_dB/(d &lambda;_L); the photon number is Poissonian with mean n, so the first harmonic is
- * multiplied by exp[n(e^(i&theta;) - 1)]: V/V0 = exp[-n(1 - cos &theta;)] at one speed, shift n sin &theta;. Over speed,
- * mass and height the complex factor is averaged and its modulus taken last. Source: S. Eibenberger et al.,
+ * multiplied by exp[n(e^(i&theta;) - 1)]: V/V0 = exp[-n(1 - cos &theta;)] at one speed, shift n sin &theta;. Over
+ * speed, mass and height the complex factor is averaged and its modulus taken last. Source: S. Eibenberger et al.,
  * arXiv:1402.5307; formula derived and checked by explicit sums over photon numbers.
  *
  * @param wavelength laser wavelength (m)
@@ -122,8 +122,8 @@ public record RecoilBeam(double wavelength, double waist, double distance, doubl
      * @param power    laser power (W)
      * @param mass     mass (kg)
      * @param velocity speed (m/s)
-     * @return cross section (m^2) with the uncertainty of both visibilities: u(n) = u(R)/(R (1 - cos &theta;)); empty if
-     *     the phase per photon is a multiple of 2&pi;, where nothing is to be seen
+     * @return cross section (m^2) with the uncertainty of both visibilities: u(n) = u(R)/(R (1 - cos &theta;)); empty
+     *     if the phase per photon is a multiple of 2&pi;, where nothing is to be seen
      */
     public Optional<Estimate> crossSection(
             Estimate with, Estimate without, double power, double mass, double velocity) {

@@ -1,9 +1,13 @@
 package fringekeep.interferometry.molecule;
 
+import fringekeep.interferometry.statistics.CurveFit;
+import fringekeep.interferometry.statistics.CurveFitOutcome;
+import fringekeep.interferometry.statistics.CurveFitter;
+import fringekeep.interferometry.statistics.ParametricModel;
+import fringekeep.interferometry.statistics.SymmetricMatrix;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
-import java.util.Locale;
-import java.util.Optional;
 
 /** Fit of a smooth curve with one minimum from a given start: the common end of the simple property fits. */
 final class SmoothFit {
@@ -12,24 +16,82 @@ final class SmoothFit {
     private SmoothFit() {}
 
     static FitOutcome fit(CurveModel model, MeasuredCurve data, double[] start, List<Parameter> parameters) {
-        CurveFitter fitter = new CurveFitter(model, data);
-        Optional<CurveFitter.Minimum> best = fitter.minimum(start);
-        if (best.isEmpty()) {
-            return new FitRefused(
-                    FitRefused.Reason.NOT_CONVERGED,
-                    "the fit of " + parameters + " came to no end: check that the data change over the range measured");
+        double[] values = new double[data.size()];
+        double[] uncertainties = new double[data.size()];
+        for (int k = 0; k < values.length; k++) {
+            values[k] = data.value(k);
+            uncertainties[k] = data.uncertainty(k);
         }
-        double[] at = best.get().parameters();
-        Optional<double[]> covariance = fitter.covariance(at);
-        if (covariance.isEmpty()) {
-            return new FitRefused(
-                    FitRefused.Reason.NOT_DETERMINED,
-                    "these data leave a combination of " + parameters + " open: measure at more different settings");
+        double[] ones = new double[start.length];
+        Arrays.fill(ones, 1.0);
+        CurveFitOutcome outcome = CurveFitter.squares(new Scaled(model, data.size(), start), values, uncertainties, ones);
+        if (outcome instanceof CurveFitOutcome.Failure failure) {
+            return new FitRefused(reason(failure.reason()), failure.words() + " Fitted were " + parameters + ".");
         }
-        PropertyFit.Solution solution = new PropertyFit.Solution(
-                at, covariance.get(), fitter.curve(at), best.get().chiSquare());
-        PropertyFit fit = new PropertyFit(parameters, solution, data, List.of());
+        PropertyFit fit = new PropertyFit(parameters, unscaled((CurveFit) outcome, start), data, List.of());
         return fit.withWarnings(warnings(fit));
+    }
+
+    private static FitRefused.Reason reason(CurveFitOutcome.Reason reason) {
+        return switch (reason) {
+            case TOO_FEW_POINTS -> FitRefused.Reason.TOO_FEW_POINTS;
+            case NOT_DETERMINED -> FitRefused.Reason.NOT_DETERMINED;
+            case BAD_START, NO_CONVERGENCE -> FitRefused.Reason.NOT_CONVERGED;
+        };
+    }
+
+    private static PropertyFit.Solution unscaled(CurveFit fit, double[] units) {
+        double[] values = fit.values();
+        double[] covariance = fit.covariance();
+        for (int i = 0; i < values.length; i++) {
+            values[i] *= units[i];
+            for (int j = 0; j <= i; j++) {
+                covariance[SymmetricMatrix.at(i, j)] *= units[i] * units[j];
+            }
+        }
+        return new PropertyFit.Solution(values, covariance, fit.expected(), fit.objective());
+    }
+
+    /** The model in units of the start, so that a cross section of 1e-21 is a number near one. */
+    private static final class Scaled implements ParametricModel {
+        private final CurveModel model;
+        private final int points;
+        private final double[] units;
+        private final double[][] jacobian;
+
+        Scaled(CurveModel model, int points, double[] units) {
+            this.model = model;
+            this.points = points;
+            this.units = units.clone();
+            this.jacobian = new double[points][units.length];
+        }
+
+        @Override
+        public int parameters() {
+            return units.length;
+        }
+
+        @Override
+        public int points() {
+            return points;
+        }
+
+        @Override
+        public boolean evaluate(double[] theta, double[] values, double[] slopes) {
+            double[] parameters = theta.clone();
+            for (int j = 0; j < units.length; j++) {
+                parameters[j] *= units[j];
+            }
+            model.evaluate(parameters, values, jacobian);
+            boolean finite = true;
+            for (int k = 0; k < points; k++) {
+                finite &= Double.isFinite(values[k]);
+                for (int j = 0; j < units.length; j++) {
+                    slopes[k * units.length + j] = jacobian[k][j] * units[j];
+                }
+            }
+            return finite;
+        }
     }
 
     private static List<FitWarning> warnings(PropertyFit fit) {
@@ -37,9 +99,7 @@ final class SmoothFit {
         if (fit.pValue() < POOR) {
             warnings.add(new FitWarning(
                     FitWarning.Sort.POOR_FIT,
-                    String.format(
-                            Locale.ROOT,
-                            "chi-square %.4g at %d degrees of freedom (p = %.2g)",
+                    Rounded.words("chi-square {4} at {} degrees of freedom (p = {2})",
                             fit.chiSquare(),
                             fit.degreesOfFreedom(),
                             fit.pValue())));

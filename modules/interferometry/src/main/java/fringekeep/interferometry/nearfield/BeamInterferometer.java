@@ -11,8 +11,8 @@ package fringekeep.interferometry.nearfield;
  * @param third       third grating
  * @param separation1 distance from grating 1 to 2 (m)
  * @param separation2 distance from grating 2 to 3 (m)
- * @param divergence  standard deviation of the beam's transverse angle (rad); infinite if unlimited, which needs matched
- *     separations
+ * @param divergence  standard deviation of the beam's transverse angle (rad); infinite if unlimited, which needs
+ *     matched separations
  */
 public record BeamInterferometer(
         BeamGrating first,

@@ -3,8 +3,8 @@ package fringekeep.interferometry.nearfield;
 /**
  * A continuous standing light wave that removes molecules where it is bright.
  *
- * <p>Behind an imperfect mirror of reflectivity R the modulation is &radic;R of the full one, and the part that does not
- * vary, (1-&radic;R)&sup2;/4 of the full antinode, removes molecules everywhere alike.
+ * <p>Behind an imperfect mirror of reflectivity R the modulation is &radic;R of the full one, and the part that does
+ * not vary, (1-&radic;R)&sup2;/4 of the full antinode, removes molecules everywhere alike.
  *
  * @param period   grating period (m), half the wavelength at normal incidence
  * @param laser    the laser; its recoil kernel plays no part

@@ -51,7 +51,8 @@ public final class FringeSeries {
     }
 
     /**
-     * Visibility of the first harmonic with the sign of the fringe: negative where the pattern is moved by half a period.
+     * Visibility of the first harmonic with the sign of the fringe: negative where the pattern is moved by half a
+     * period.
      *
      * @return 2 S_1/S_0
      */

@@ -6,9 +6,10 @@ import fringekeep.interferometry.constants.Codata2018;
  * How strongly a standing light wave acts: peak phase and mean number of absorbed photons at the antinode.
  *
  * <p>A retro-reflected Gaussian beam of incident power P and 1/e&sup2; intensity radius w_y across the molecular beam,
- * crossed at speed v: &phi;0 = 8 &radic;(2&pi;) &alpha;' P/(&#x127; c w_y v), n0 = (8/&radic;(2&pi;)) &sigma; &lambda; P/(h c w_y v),
- * with &alpha;' the polarizability volume and antinode intensity four times the incident one (integral of the
- * standing-wave intensity along the path). Independent of the radius along the beam. Accuracy: rounding.
+ * crossed at speed v: &phi;0 = 8 &radic;(2&pi;) &alpha;' P/(&#x127; c w_y v), n0 = (8/&radic;(2&pi;)) &sigma;
+ * &lambda; P/(h c w_y v), with &alpha;' the polarizability volume and antinode intensity four times the incident one
+ * (integral of the standing-wave intensity along the path). Independent of the radius along the beam. Accuracy:
+ * rounding.
  */
 public final class LightStrength {
     private LightStrength() {}

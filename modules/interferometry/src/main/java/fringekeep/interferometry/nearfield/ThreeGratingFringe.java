@@ -12,8 +12,9 @@ import fringekeep.interferometry.constants.Codata2018;
  *   s1 = (h/m)(n1 T1/d1 - n3 T2/d3),  s2 = -(h/m) n3 T2/d3,  s3 = 0
  *   S_l = exp[-(m s1 &sigma;_v/&#x127;)&sup2;/2] B1_n1(s1/d1) B2_n2(s2/d2) B3_n3(0)
  * </pre>
- * which for equal periods is B1_1(-l&tau;/T_T) B2_2(l T2/T_T) B3_1(0) with &tau; = T2-T1 and T_T = m d&sup2;/h. Only the
- * first grating sees the sign of &tau;. Checked against amplitude propagation (plane waves through three operators).
+ * which for equal periods is B1_1(-l&tau;/T_T) B2_2(l T2/T_T) B3_1(0) with &tau; = T2-T1 and T_T = m d&sup2;/h. Only
+ * the first grating sees the sign of &tau;. Checked against amplitude propagation (plane waves through three
+ * operators).
  *
  * <p>Thread rule: immutable.
  *

@@ -8,16 +8,18 @@ import java.util.Optional;
 import java.util.function.DoubleUnaryOperator;
 
 /**
- * Visibility of a slit - light - slit interferometer as a function of laser power, averaged over speed, mass and height:
- * V(P) = 2 |&Sigma; W_q B_n2(c_q &alpha;'P, z_q &sigma;P)|, the signed amplitude being averaged and the modulus taken last.
+ * Visibility of a slit - light - slit interferometer as a function of laser power, averaged over speed, mass and
+ * height: V(P) = 2 |&Sigma; W_q B_n2(c_q &alpha;'P, z_q &sigma;P)|, the signed amplitude being averaged and the
+ * modulus taken last.
  *
- * <p>Everything but &alpha;'P and &sigma;P is fixed at construction: W_q holds the outer gratings and the weights of the
- * ensemble, normalised by the mean transmission. Derivatives are analytic. Without absorption V depends on the one
+ * <p>Everything but &alpha;'P and &sigma;P is fixed at construction: W_q holds the outer gratings and the weights of
+ * the ensemble, normalised by the mean transmission. Derivatives are analytic. Without absorption V depends on the one
  * number &alpha;'P alone and can be tabulated ({@link #tabulated}); the table agrees with the sum to 1e-14.
  *
  * <p>A small negative cross section is accepted, so that a fit may fall on either side of zero.
  *
- * <p>Thread rule: immutable. Cost: about 10 ns per node without, 60 ns with absorption; about 10 ns in all with the table.
+ * <p>Thread rule: immutable. Cost: about 10 ns per node without, 60 ns with absorption; about 10 ns in all with the
+ * table.
  */
 public final class VisibilityAgainstPower {
     private static final double CELL = 0.5;
@@ -66,7 +68,8 @@ public final class VisibilityAgainstPower {
     /**
      * The same model with its absorption-free curve tabulated.
      *
-     * @param largestProduct largest polarizability volume times power to be asked for (m^3 W); beyond it the sum is used
+     * @param largestProduct largest polarizability volume times power to be asked for (m^3 W); beyond it the sum is
+     *     used
      * @return a model that answers absorption-free questions from the table; this model itself if the table would cost
      *     more than it saves (over 3e7 kernel values)
      */
@@ -223,7 +226,8 @@ public final class VisibilityAgainstPower {
     /**
      * Mean absorption exponent per cross section and power.
      *
-     * @return &Sigma; |W_q z_q| / &Sigma; |W_q| (1/(m^2 W)), zero if absorption leaves no trace at this Talbot parameter
+     * @return &Sigma; |W_q z_q| / &Sigma; |W_q| (1/(m^2 W)), zero if absorption leaves no trace at this Talbot
+     *     parameter
      */
     public double meanAbsorptionFactor() {
         double sum = 0.0;

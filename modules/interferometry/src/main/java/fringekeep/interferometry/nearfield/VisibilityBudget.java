@@ -7,7 +7,8 @@ import java.util.List;
 /**
  * From the visibility an ideal instrument would show to the one to be expected: every reduction, and which dominate.
  *
- * <p>Independent reductions multiply; the share of one is its part of the logarithm of the total. Thread rule: immutable.
+ * <p>Independent reductions multiply; the share of one is its part of the logarithm of the total. Thread rule:
+ * immutable.
  *
  * @param ideal   visibility without reductions, 0 to 1
  * @param entries reductions in the order given

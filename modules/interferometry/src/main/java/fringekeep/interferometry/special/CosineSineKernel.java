@@ -5,12 +5,12 @@ package fringekeep.interferometry.special;
  *
  * <p>B_n = e^k (1/2&pi;) &int; exp(a cos&theta; + i c sin&theta;) e^(-i n &theta;) d&theta;
  * = e^k (c+a)^n G_n(c&sup2;-a&sup2;) for n &ge; 0 and e^k (a-c)^|n| G_|n| for n &lt; 0, G_n being
- * {@link EntireBessel}. The form is entire in a and c: no root, branch or sign function, no singularity at c = &plusmn;a.
- * Derived from the generating function (NIST Digital Library of Mathematical Functions 10.12.1, 10.35.1).
+ * {@link EntireBessel}. The form is entire in a and c: no root, branch or sign function, no singularity at c =
+ * &plusmn;a. Derived from the generating function (NIST Digital Library of Mathematical Functions 10.12.1, 10.35.1).
  *
  * <p>The logarithm k of the prefactor is taken in before anything is exponentiated, so that large a with k &le; -|a|
- * neither overflows nor loses digits. Accuracy: 1e-13 relative to e^k I_|n|(|a|) and to |J_n| envelopes, see tests.
- * Thread rule: stateless.
+ * neither overflows nor loses digits. Accuracy: absolute 5e-14 of the largest coefficient for k = -|a|, c up to 40 and
+ * a up to 30, tested at 300 points against 30-digit sums. Thread rule: stateless.
  */
 public final class CosineSineKernel {
     private CosineSineKernel() {}

@@ -6,8 +6,8 @@ import fringekeep.interferometry.statistics.Estimate;
 /**
  * Damping of a sphere by a dilute gas whose mean free path exceeds it by far, and the radius and mass that follow.
  *
- * <p>&Gamma; = &delta; p m_g v_th/(kT &rho; r), v_th = &radic;(8kT/(&pi;m_g)) the mean speed of the gas; &delta; = 1 for
- * specular, 1 + &pi;/8 for fully accommodated diffuse reflection. Source: P. S. Epstein, Phys. Rev. 23, 710 (1924);
+ * <p>&Gamma; = &delta; p m_g v_th/(kT &rho; r), v_th = &radic;(8kT/(&pi;m_g)) the mean speed of the gas; &delta; = 1
+ * for specular, 1 + &pi;/8 for fully accommodated diffuse reflection. Source: P. S. Epstein, Phys. Rev. 23, 710 (1924);
  * factors from memory.
  *
  * @param pressure      gas pressure (Pa)

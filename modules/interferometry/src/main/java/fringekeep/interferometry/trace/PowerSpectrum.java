@@ -10,8 +10,8 @@ import org.apache.commons.math3.transform.TransformType;
  * One-sided power spectral density of a trace, averaged over half-overlapping Hann-windowed segments, each freed of its
  * mean.
  *
- * <p>Source: P. D. Welch, IEEE Trans. Audio Electroacoust. 15, 70 (1967). The integral over frequency is the variance of
- * the trace. Thread rule: immutable.
+ * <p>Source: P. D. Welch, IEEE Trans. Audio Electroacoust. 15, 70 (1967). The integral over frequency is the variance
+ * of the trace. Thread rule: immutable.
  */
 public final class PowerSpectrum {
     private final double[] density;

@@ -6,7 +6,8 @@ import fringekeep.interferometry.statistics.SymmetricMatrix;
 import java.util.Optional;
 
 /**
- * Cooling or heating rate from the energy of an oscillator after a change: E(t) = E_end + (E_start - E_end) exp(-rate t).
+ * Cooling or heating rate from the energy of an oscillator after a change: E(t) = E_end + (E_start - E_end) exp(-rate
+ * t).
  *
  * <p>For each rate the two energies follow by linear least squares; the rate by Gauss-Newton from a scan over four
  * decades. Weighted by the uncertainties given.

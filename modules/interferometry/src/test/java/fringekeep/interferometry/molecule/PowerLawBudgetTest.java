@@ -22,6 +22,13 @@ class PowerLawBudgetTest {
     }
 
     @Test
+    void recordedWordsReadTheSameOnEveryRelease() {
+        assertThat(Rounded.words("from {3} to {4} in {} steps", 1.23456e-28, 2.0e-3, 7))
+                .isEqualTo("from 1.23E-28 to 0.002000 in 7 steps");
+        assertThat(Rounded.to(3, Double.POSITIVE_INFINITY)).isEqualTo("infinite");
+    }
+
+    @Test
     void momentAndPolarizabilityFollowFromTwoTemperatures() {
         double alpha = Polarizability.siFromVolume(90e-30);
         double moment = Math.pow(2.0 * 1e-21 / 299792458.0, 2);

@@ -4,12 +4,16 @@ import fringekeep.interferometry.statistics.SymmetricMatrix;
 import java.util.Optional;
 
 /**
- * Weighted least squares of a curve with few parameters: damped Gauss-Newton steps in parameters scaled by their own
- * curvature, then undamped polishing, so that the answer is the minimum to rounding and not to the flatness of the cost.
+ * Weighted least squares of a curve with few parameters whose modulus makes kinks: damped Gauss-Newton steps in
+ * parameters scaled by their own curvature, then undamped polishing, so that the answer is the minimum to rounding.
+ *
+ * <p>Beside the general {@link fringekeep.interferometry.statistics.CurveFitter} because a visibility |S_1| has a kink
+ * wherever the fringe changes sign: there the general fitter rightly refuses, this one stops at the kink and says so. It
+ * also keeps its arrays, which makes a bootstrap of thousands of fits a matter of milliseconds.
  *
  * <p>Source: D. W. Marquardt, J. Soc. Indust. Appl. Math. 11, 431 (1963), with the diagonal as scale.
  */
-final class CurveFitter {
+final class KinkedCurveFitter {
     private static final int MAXIMUM_STEPS = 300;
     private static final double SMALLEST_PIVOT = 1e-11;
     private static final double FINISHED = 1e-9;
@@ -26,7 +30,7 @@ final class CurveFitter {
     /** Fall of the sum of squares that the last step promised if the model were linear. */
     private double promised;
 
-    CurveFitter(CurveModel model, MeasuredCurve data) {
+    KinkedCurveFitter(CurveModel model, MeasuredCurve data) {
         this.model = model;
         this.data = data;
         this.count = model.parameters();
