@@ -143,18 +143,16 @@ public record DeflectionFit(double phasePerSusceptibility, double lowest, double
             if (excess < NEARBY && Math.abs(other.susceptibility - value) > apart) {
                 warnings.add(new FitWarning(
                         FitWarning.Sort.AMBIGUOUS_PHASE,
-                        Rounded.words("a susceptibility of {5}, phases unwrapped otherwise, fits almost as well (chi-square"
+                        Rounded.words(
+                                "a susceptibility of {5}, phases unwrapped otherwise, fits almost as well (chi-square"
                                         + " larger by {3}); add field strengths in between",
-                                other.susceptibility,
-                                excess)));
+                                other.susceptibility, excess)));
             }
         }
         if (fit.pValue() < 1e-3) {
             warnings.add(new FitWarning(
                     FitWarning.Sort.POOR_FIT,
-                    Rounded.words("chi-square {4} at {} degrees of freedom",
-                            fit.chiSquare(),
-                            data.size() - 2)));
+                    Rounded.words("chi-square {4} at {} degrees of freedom", fit.chiSquare(), data.size() - 2)));
         }
         return warnings;
     }

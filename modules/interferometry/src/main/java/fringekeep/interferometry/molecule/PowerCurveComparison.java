@@ -96,11 +96,9 @@ public record PowerCurveComparison(
 
     private static String reason(
             Verdict verdict, double ratio, double ifQuantum, double ifClassical, double threshold) {
-        String numbers = Rounded.words("ln L differs by {3}, {3} was to be expected if quantum, {3} if classical, {3} is asked for",
-                ratio,
-                ifQuantum,
-                ifClassical,
-                threshold);
+        String numbers = Rounded.words(
+                "ln L differs by {3}, {3} was to be expected if quantum, {3} if classical, {3} is asked for",
+                ratio, ifQuantum, ifClassical, threshold);
         return switch (verdict) {
             case QUANTUM -> "matter waves describe the data better: " + numbers;
             case CLASSICAL -> "point particles describe the data better: " + numbers;

@@ -99,8 +99,7 @@ public record PowerCurveFitter(PowerSeriesSetup setup, BeamEnsemble ensemble, Po
                     FitRefused.Reason.NOT_CONVERGED,
                     Rounded.words(
                             "no minimum was found for a polarizability volume from {4} to {4} m^3: check powers, speeds and waist",
-                            lowest(perVolume),
-                            highest(perVolume)));
+                            lowest(perVolume), highest(perVolume)));
         }
         return finished(model, fitter, minima, perVolume);
     }
@@ -260,7 +259,8 @@ public record PowerCurveFitter(PowerSeriesSetup setup, BeamEnsemble ensemble, Po
         if (factor.value() > 1.0 + 2.0 * factor.standardUncertainty()) {
             warnings.add(new FitWarning(
                     FitWarning.Sort.FACTOR_ABOVE_ONE,
-                    Rounded.words("the visibility factor is {4}, more than an ideal instrument gives", factor.value())));
+                    Rounded.words(
+                            "the visibility factor is {4}, more than an ideal instrument gives", factor.value())));
         }
     }
 

@@ -15,7 +15,9 @@ final class Rounded {
         if (!Double.isFinite(value)) {
             return Double.isNaN(value) ? "not a number" : value > 0.0 ? "infinite" : "minus infinite";
         }
-        return new BigDecimal(value).round(new MathContext(digits, RoundingMode.HALF_EVEN)).toString();
+        return new BigDecimal(value)
+                .round(new MathContext(digits, RoundingMode.HALF_EVEN))
+                .toString();
     }
 
     /**

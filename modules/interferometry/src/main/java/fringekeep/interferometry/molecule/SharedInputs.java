@@ -107,7 +107,9 @@ public final class SharedInputs {
     private Optional<double[]> refitted(SharedInput input, double factor) {
         MeasuredCurve changed = input.changed(data, factor);
         PowerCurveModel model = input.changed(fitter, factor).near(changed, description, fit.values());
-        return new KinkedCurveFitter(model, model.data()).minimum(fit.values()).map(KinkedCurveFitter.Minimum::parameters);
+        return new KinkedCurveFitter(model, model.data())
+                .minimum(fit.values())
+                .map(KinkedCurveFitter.Minimum::parameters);
     }
 
     /**

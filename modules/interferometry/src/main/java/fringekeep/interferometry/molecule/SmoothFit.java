@@ -24,7 +24,8 @@ final class SmoothFit {
         }
         double[] ones = new double[start.length];
         Arrays.fill(ones, 1.0);
-        CurveFitOutcome outcome = CurveFitter.squares(new Scaled(model, data.size(), start), values, uncertainties, ones);
+        CurveFitOutcome outcome =
+                CurveFitter.squares(new Scaled(model, data.size(), start), values, uncertainties, ones);
         if (outcome instanceof CurveFitOutcome.Failure failure) {
             return new FitRefused(reason(failure.reason()), failure.words() + " Fitted were " + parameters + ".");
         }
@@ -99,10 +100,9 @@ final class SmoothFit {
         if (fit.pValue() < POOR) {
             warnings.add(new FitWarning(
                     FitWarning.Sort.POOR_FIT,
-                    Rounded.words("chi-square {4} at {} degrees of freedom (p = {2})",
-                            fit.chiSquare(),
-                            fit.degreesOfFreedom(),
-                            fit.pValue())));
+                    Rounded.words(
+                            "chi-square {4} at {} degrees of freedom (p = {2})",
+                            fit.chiSquare(), fit.degreesOfFreedom(), fit.pValue())));
         }
         for (Parameter parameter : fit.parameters()) {
             if (fit.estimate(parameter).value() < 0.0) {

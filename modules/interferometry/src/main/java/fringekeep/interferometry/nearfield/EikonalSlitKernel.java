@@ -9,7 +9,7 @@ import java.util.function.DoubleUnaryOperator;
  *
  * <p>Coefficients are integrals over the open part of one slit (slit width less the cut-off on both sides) by 16-point
  * Gauss-Legendre panels. A panel is halved until it is shorter than 0.4 of its distance to the nearest singularity and
- * its phase changes by less than 2 rad. Accuracy: 1e-12 of the transmission, tested against a brute mid-point rule.
+ * its phase changes by less than 2 rad. Accuracy: 1e-12 of the transmission, tested against 25-digit quadrature.
  * Classical counterpart: the molecule is deflected by the local gradient of the eikonal phase.
  *
  * <p>Thread rule: immutable.

@@ -110,13 +110,12 @@ class PowerCurveTest {
         // Up to the first maximum absorption only lowers the curve, as a smaller factor does.
         MeasuredCurve data = simulated(coarseBeam(), 1.5e-21, 2.5, 16L);
         PropertyFit fit = fitter(
-                        coarseBeam(), PowerCurveChoices.polarizabilityOnly().withFreeFactor().withFreeCrossSection())
+                        coarseBeam(),
+                        PowerCurveChoices.polarizabilityOnly().withFreeFactor().withFreeCrossSection())
                 .fit(data, Description.QUANTUM)
                 .orThrow();
 
-        assertThat(fit.warnings())
-                .extracting(FitWarning::sort)
-                .contains(FitWarning.Sort.PARAMETERS_DEGENERATE);
+        assertThat(fit.warnings()).extracting(FitWarning::sort).contains(FitWarning.Sort.PARAMETERS_DEGENERATE);
     }
 
     @Test

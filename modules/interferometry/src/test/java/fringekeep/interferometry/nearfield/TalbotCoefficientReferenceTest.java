@@ -29,6 +29,23 @@ class TalbotCoefficientReferenceTest {
         }
     }
 
+    @Test
+    void attractingWallsEqualTheDefinition() throws IOException {
+        List<String> lines = Files.readAllLines(Path.of("src/test/reference/talbot/walls.csv"));
+        assertThat(lines).hasSize(18);
+        for (String line : lines.subList(2, lines.size())) {
+            String[] cells = line.split(",");
+            double coefficient = Double.parseDouble(cells[2]);
+            double cutoff = Double.parseDouble(cells[5]);
+            WallPotential wall = new WallPotential(coefficient, Integer.parseInt(cells[3]), 1.6e-7, cutoff);
+            EikonalSlitKernel kernel = new EikonalSlitKernel(
+                    2.66e-7, Double.parseDouble(cells[4]), wall, Double.parseDouble(cells[6]));
+            assertThat(kernel.quantum(Integer.parseInt(cells[0]), Double.parseDouble(cells[1])))
+                    .as(line)
+                    .isCloseTo(Double.parseDouble(cells[7]), within(1e-12 * kernel.transmission()));
+        }
+    }
+
     private static TalbotKernel kernel(String sort, double phase, double photons) {
         return switch (sort) {
             case "phase" -> LightKernel.ofPhase(phase);
