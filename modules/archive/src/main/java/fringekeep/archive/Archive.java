@@ -1,6 +1,7 @@
 package fringekeep.archive;
 
 import fringekeep.archive.graph.Graph;
+import fringekeep.archive.graph.StateName;
 import fringekeep.archive.kind.Inputs;
 import fringekeep.archive.kind.Kinds;
 import fringekeep.archive.kind.RecordView;
@@ -10,14 +11,18 @@ import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
 import fringekeep.archive.problem.StoppedException;
 import fringekeep.archive.problem.Work;
+import fringekeep.archive.record.ArchiveId;
 import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.PersonId;
+import fringekeep.archive.record.RecordSource;
 import java.io.InputStream;
 import java.nio.file.Path;
 import java.time.Instant;
+import java.util.Collection;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 
 /**
  * One lab's store, open in this process. Thread-safe: one writer thread inside, readers see a committed watermark and never
@@ -58,6 +63,18 @@ public interface Archive extends AutoCloseable {
     /** How many current records each kind has. */
     Map<String, Long> counts();
 
+    /** Whether counts and lists know states by now: right after opening the graph is still being loaded. */
+    boolean graphReady();
+
+    /** States of records for a list, if the graph is loaded by now; never waits for it. */
+    Optional<Map<Hash, Set<StateName>>> states(Collection<Hash> records);
+
+    /**
+     * How many records each kind has within a scope. Waits for the graph when it is still being loaded, so never to be asked
+     * on the window's thread.
+     */
+    Map<String, KindCount> counts(Scope scope);
+
     /** A page of a projection. */
     Page list(Listing listing) throws ProblemException;
 
@@ -67,6 +84,12 @@ public interface Archive extends AutoCloseable {
     /** Entries n = from … in order, as their exact bytes. */
     List<byte[]> journal(long from, int limit);
 
+    /** Entries n = from … in order, in short. */
+    List<JournalLine> journalLines(long from, int limit);
+
+    /** Entries written at or after {@code from} and before {@code to}, in order. */
+    List<JournalLine> journalLines(Instant from, Instant to);
+
     /** Hash of the last committed entry. */
     Hash journalHead();
 
@@ -75,6 +98,9 @@ public interface Archive extends AutoCloseable {
 
     /** Exact stored bytes of a head or part by hash. */
     Optional<byte[]> stored(Hash hash);
+
+    /** Exact stored bytes of everything at hand. */
+    RecordSource source();
 
     // ---- writing
 
@@ -90,6 +116,9 @@ public interface Archive extends AutoCloseable {
 
     /** Records all in one transaction (at most 100); returns after the commit. */
     List<Recorded> record(List<Prepared> records) throws ProblemException;
+
+    /** Records all in one transaction and removes the drafts they were entered in. */
+    List<Recorded> record(List<Prepared> records, Set<String> drafts) throws ProblemException;
 
     /** Prepares and records one. */
     default Recorded record(NewRecord record) throws ProblemException {
@@ -141,6 +170,16 @@ public interface Archive extends AutoCloseable {
     /** Receives records from a plain copy or a bundle's folder; known ones are skipped. */
     Received receive(Path folder, boolean withPersons, Work work) throws StoppedException, ProblemException;
 
+    /**
+     * Receives records from a source of bytes by hash, such as a bundle.
+     *
+     * @param records fingerprints of all records offered, in any order
+     * @param source their bytes
+     * @param origin the archive they come from and what it calls itself
+     */
+    Received receive(List<Hash> records, RecordSource source, Origin origin, Work work)
+            throws StoppedException, ProblemException;
+
     /** Calls a listener after each commit, on the writer thread, with the new watermark. */
     AutoCloseable onCommit(java.util.function.LongConsumer listener);
 
@@ -152,6 +191,9 @@ public interface Archive extends AutoCloseable {
 
     /** A raw file taken in. */
     record RawTaken(Hash hash, long bytes, boolean known) {}
+
+    /** Where received records come from. */
+    record Origin(ArchiveId archive, String title) {}
 
     /** What can be purged. */
     enum PurgeTarget {
