@@ -176,7 +176,7 @@ public final class FringeFit implements FringeOutcome {
      * Confidence interval of the visibility; see {@link FringeProfile} for how it is made and how far it holds.
      *
      * @param level confidence level, for example 0.6827 or 0.9545
-     * @return the interval, empty where the mean is not positive
+     * @return the interval, empty where the mean is not positive or the covariance is singular
      */
     public Optional<Interval> visibilityInterval(double level) {
         return values[0] > 0 ? FringeProfile.of(this).visibility(level) : Optional.empty();
@@ -236,7 +236,8 @@ public final class FringeFit implements FringeOutcome {
     /**
      * Significance of the modulation against none.
      *
-     * @return the test, empty where the period was free (its search would have to be counted)
+     * @return the test, empty where the period was free (its search would have to be counted), the mean is not positive, or
+     *     the model without a modulation cannot be fitted
      */
     public Optional<FringeSignificance> significance() {
         return options.periodFree() ? Optional.empty() : FringeSignificance.of(this);

@@ -24,6 +24,9 @@ public record FringeSignificance(double statistic, double pValue, double deviati
         if (fit.options().estimator() == Estimator.POISSON_LIKELIHOOD) {
             double deviate = FringeProfile.of(fit).visibilityDeviate(0);
             statistic = deviate * deviate;
+            if (!(statistic < Double.POSITIVE_INFINITY)) {
+                return Optional.empty();
+            }
         } else {
             double[] two = widened.covariance();
             double[] block = {two[2], two[4], two[5]};

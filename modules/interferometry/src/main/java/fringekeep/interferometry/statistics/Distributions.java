@@ -32,10 +32,31 @@ public final class Distributions {
         if (!(probability > 0 && probability < 1)) {
             throw new IllegalArgumentException("probability must lie between 0 and 1, is " + probability);
         }
+        double tail = Math.min(probability, 1 - probability);
+        if (tail < 0.02) {
+            double far = tailQuantile(tail);
+            return probability < 0.5 ? -far : far;
+        }
         double z = ROOT_TWO * Erf.erfInv(2 * probability - 1);
         for (int polish = 0; polish < 2; polish++) {
             double density = StrictMath.exp(-0.5 * z * z) / Math.sqrt(2 * Math.PI);
-            z -= density > 0 ? (normal(z) - probability) / density : 0;
+            z -= (normal(z) - probability) / density;
+        }
+        return z;
+    }
+
+    /** The deviate with a small probability above it, by Newton steps on the logarithm of the tail. */
+    private static double tailQuantile(double tail) {
+        double twice = -2 * StrictMath.log(tail);
+        double z = Math.sqrt(twice - StrictMath.log(2 * Math.PI * Math.max(twice - 1.8, 1)));
+        for (int step = 0; step < 30; step++) {
+            double above = normal(-z);
+            double density = StrictMath.exp(-0.5 * z * z) / Math.sqrt(2 * Math.PI);
+            double move = StrictMath.log(above / tail) * above / density;
+            z += move;
+            if (Math.abs(move) <= 1e-15 * z) {
+                break;
+            }
         }
         return z;
     }

@@ -15,6 +15,9 @@ class DistributionsReferenceTest {
         assertThat(Distributions.normalQuantile(0.975)).isCloseTo(1.959963984540054, within(1e-12));
         assertThat(Distributions.twoSidedDeviate(0.6826894921370859)).isCloseTo(1, within(1e-12));
         assertThat(Distributions.twoSidedDeviate(0.9544997361036416)).isCloseTo(2, within(1e-12));
+        // Abramowitz and Stegun, table 26.6: Q(x) = 10^-m.
+        assertThat(-Distributions.normalQuantile(1e-10)).isCloseTo(6.36134, within(1e-5));
+        assertThat(-Distributions.normalQuantile(1e-100)).isCloseTo(21.27345, within(1e-5));
         assertThatThrownBy(() -> Distributions.normalQuantile(1)).isInstanceOf(IllegalArgumentException.class);
     }
 
