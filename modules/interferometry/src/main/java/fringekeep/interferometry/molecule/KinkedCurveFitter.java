@@ -60,10 +60,11 @@ final class KinkedCurveFitter {
             while (!better && damping < LARGEST_DAMPING) {
                 double[] trial = here.clone();
                 length = move(trial, damping);
-                double trialSquare = chiSquare(trial);
+                double trialSquare = evaluate(trial);
                 better = trialSquare < before;
                 if (better) {
                     next = trial;
+                    chiSquare = trialSquare;
                     damping = adjusted(damping, (before - trialSquare) / promised);
                 } else if (length < FINISHED) {
                     return Optional.of(polished(here));
@@ -74,8 +75,8 @@ final class KinkedCurveFitter {
             if (!better) {
                 return Optional.of(new Minimum(here, before, false));
             }
+            // The accepted trial was the last point evaluated, so its slopes are at hand for the next step.
             here = next;
-            chiSquare = evaluate(here);
             if (length < FINISHED) {
                 return Optional.of(polished(here));
             }
@@ -134,10 +135,6 @@ final class KinkedCurveFitter {
     double[] curve(double[] at) {
         model.evaluate(at, values, jacobian);
         return values.clone();
-    }
-
-    private double chiSquare(double[] at) {
-        return evaluate(at);
     }
 
     private double evaluate(double[] at) {

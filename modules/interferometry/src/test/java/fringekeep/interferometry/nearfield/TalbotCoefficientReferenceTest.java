@@ -38,8 +38,8 @@ class TalbotCoefficientReferenceTest {
             double coefficient = Double.parseDouble(cells[2]);
             double cutoff = Double.parseDouble(cells[5]);
             WallPotential wall = new WallPotential(coefficient, Integer.parseInt(cells[3]), 1.6e-7, cutoff);
-            EikonalSlitKernel kernel = new EikonalSlitKernel(
-                    2.66e-7, Double.parseDouble(cells[4]), wall, Double.parseDouble(cells[6]));
+            EikonalSlitKernel kernel =
+                    new EikonalSlitKernel(2.66e-7, Double.parseDouble(cells[4]), wall, Double.parseDouble(cells[6]));
             assertThat(kernel.quantum(Integer.parseInt(cells[0]), Double.parseDouble(cells[1])))
                     .as(line)
                     .isCloseTo(Double.parseDouble(cells[7]), within(1e-12 * kernel.transmission()));
