@@ -157,11 +157,7 @@ final class EnteredParts {
                 QuantityText.of(object.text("text").get(), object.text("unit").orElseThrow(), deviation);
         return Optional.of(
                 sort.equals("exact")
-                        ? new Quantity(
-                                quantity.text(),
-                                quantity.unit(),
-                                quantity.si(),
-                                new Uncertainty.Exact())
+                        ? new Quantity(quantity.text(), quantity.unit(), quantity.si(), new Uncertainty.Exact())
                         : quantity);
     }
 

@@ -70,8 +70,7 @@ public final class GraphBuilder {
     /** Adds a record as it is seen: reads what it needs from content and result. */
     public void add(long n, RecordView record) {
         boolean judgement = record.head().kind().text().equals(GraphData.JUDGEMENT);
-        Optional<JsonObject> content =
-                judgement ? record.part(PartName.CONTENT) : Optional.empty();
+        Optional<JsonObject> content = judgement ? record.part(PartName.CONTENT) : Optional.empty();
         add(n, record.head(), record.fingerprint(), content, scanStart(record.result()));
     }
 
