@@ -1,6 +1,7 @@
 package fringekeep.property.internal;
 
 import fringekeep.archive.facet.Estimates;
+import fringekeep.archive.facet.TimeSpan;
 import fringekeep.archive.json.JsonObject;
 import fringekeep.archive.kind.Input;
 import fringekeep.archive.kind.Inputs;
@@ -9,6 +10,7 @@ import fringekeep.archive.record.Hash;
 import fringekeep.instrument.CalibrationFacet;
 import fringekeep.instrument.CalibrationTarget;
 import fringekeep.scan.SettingsFacet;
+import java.time.Instant;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
@@ -109,22 +111,50 @@ final class PowerPoints {
                 .findFirst();
     }
 
+    /** Of each target the calibration that held when the fit's scans began: the latest begun by then. */
     private List<PowerPoint.Pinned> calibrations(Input fit) {
         List<PowerPoint.Pinned> pinned = new ArrayList<>();
         List<Input> all = new ArrayList<>(fit.inputs().role("calibration"));
         all.addAll(inputs.role("calibration"));
-        for (Input calibration : all) {
-            Hash record = calibration.target();
-            boolean known = pinned.stream().anyMatch(each -> each.record().equals(record));
-            Optional<CalibrationFacet> facet = calibration.facet(CalibrationFacet.class);
-            boolean ofPower = facet.map(each -> each.target() == CalibrationTarget.POWER_SCALE
-                            || each.target() == CalibrationTarget.POWER_WAIST)
-                    .orElse(false);
-            if (ofPower && !known) {
-                pinned.add(new PowerPoint.Pinned(record, facet.get()));
+        for (CalibrationTarget target : List.of(CalibrationTarget.POWER_SCALE, CalibrationTarget.POWER_WAIST)) {
+            List<PowerPoint.Pinned> candidates = new ArrayList<>();
+            for (Input calibration : all) {
+                calibration
+                        .facet(CalibrationFacet.class)
+                        .filter(facet -> facet.target() == target)
+                        .ifPresent(facet -> candidates.add(new PowerPoint.Pinned(calibration.target(), facet)));
+            }
+            if (!candidates.isEmpty()) {
+                held(candidates, fit, target).ifPresent(pinned::add);
             }
         }
         return pinned;
+    }
+
+    private Optional<PowerPoint.Pinned> held(List<PowerPoint.Pinned> candidates, Input fit, CalibrationTarget target) {
+        Optional<Instant> start = fit.inputs().role("scan").stream()
+                .map(scan -> scan.facet(TimeSpan.class))
+                .flatMap(Optional::stream)
+                .map(span -> span.start().at())
+                .min(Comparator.naturalOrder());
+        if (start.isEmpty()
+                && candidates.stream().map(PowerPoint.Pinned::record).distinct().count() == 1) {
+            return Optional.of(candidates.get(0));
+        }
+        Optional<PowerPoint.Pinned> latest = start.flatMap(at -> candidates.stream()
+                .filter(each -> each.calibration().holds(at))
+                .max(Comparator.comparing(
+                                (PowerPoint.Pinned each) -> each.calibration().from())
+                        .thenComparing(PowerPoint.Pinned::record)));
+        if (latest.isEmpty()) {
+            problems.add(new Problem(
+                    "property.no-calibration",
+                    "No pinned calibration of the " + target.code().replace('-', ' ') + " held when the scans of fit "
+                            + fit.target().shortForm() + " began.",
+                    "/inputs",
+                    "Pin the calibration that held then, or none for all fits."));
+        }
+        return latest;
     }
 
     /**
