@@ -221,6 +221,60 @@ class FitKindTest {
     }
 
     @Test
+    void aBackgroundScanOfManyScansCountsOnce() throws ProblemException {
+        Hash setup = bench.setup(Bench.SETUP);
+        Hash background = bench.scan(HEADED, file(9, 0, 0, "2031-05-14T08:00:00Z", 30));
+        List<Hash> scans = new ArrayList<>();
+        for (int k = 0; k < 4; k++) {
+            scans.add(bench.scan(HEADED, usual(31 + k)));
+        }
+
+        for (String combine : List.of("sum", "sum-after-phase", "joint")) {
+            RecordView fit = bench.fit(
+                    "{'background':{'sort':'scan'},'combine':'" + combine + "'}",
+                    setup,
+                    scans,
+                    Bench.scanInput("background", background, "counts"),
+                    DetachedRecords.input("placement", bench.place(background, setup, "background")));
+
+            double rate = Bench.member(fit, "backgroundRate", "value");
+            assertThat(rate).isBetween(0.7, 1.1);
+            double exposure = 32 * 10;
+            assertThat(Bench.member(fit, "backgroundRate", "u"))
+                    .as(combine)
+                    .isCloseTo(Math.sqrt(rate * exposure) / exposure, within(1e-12));
+        }
+    }
+
+    @Test
+    void correctsPositionsByAPinnedCalibrationAndNamesItAsASource() throws ProblemException {
+        Hash setup = bench.setup(Bench.SETUP);
+        Hash scan = bench.scan(HEADED, usual(40));
+        Hash calibration = bench.records.enter("calibration", Bench.json("""
+                        {'what':'position-scale','model':'calibration.scale/1','covariance':[1e-8],
+                         'parameters':[{'name':'scale','value':1.01,'unit':'1'}],
+                         'valid':{'from':'2031-05-01T00:00:00Z'}}"""));
+
+        RecordView read = bench.fit("{'period':{'sort':'fixed','si':2.66e-7}}", setup, List.of(scan));
+        RecordView corrected = bench.fit(
+                "{'period':{'sort':'fixed','si':2.6866e-7}}",
+                setup,
+                List.of(scan),
+                DetachedRecords.input("calibration", calibration));
+
+        assertThat(corrected.choices().text("positions")).contains("calibrated");
+        assertThat(Bench.member(corrected, "visibility", "value"))
+                .isCloseTo(Bench.member(read, "visibility", "value"), within(1e-9));
+        Estimates estimates =
+                bench.records.facet(corrected.fingerprint(), Estimates.class).orElseThrow();
+        assertThat(estimates.sensitivities()).singleElement().satisfies(shared -> {
+            assertThat(shared.source()).isEqualTo(calibration);
+            assertThat(shared.parameter()).isEqualTo("scale");
+            assertThat(shared.deviation()).isCloseTo(1e-4, within(1e-12));
+        });
+    }
+
+    @Test
     void correctsForDeadTime() throws ProblemException {
         Hash setup = bench.setup(Bench.SETUP);
         RecordView open = plain("{}", setup, usual(7));

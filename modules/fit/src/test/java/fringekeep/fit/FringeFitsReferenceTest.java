@@ -71,10 +71,20 @@ class FringeFitsReferenceTest {
     }
 
     @ParameterizedTest
-    @ValueSource(strings = {"fringe_01", "fringe_02", "fringe_03", "fringe_04", "fringe_05", "fringe_07"})
+    @ValueSource(
+            strings = {
+                "fringe_01",
+                "fringe_02",
+                "fringe_03",
+                "fringe_04",
+                "fringe_05",
+                "fringe_06",
+                "fringe_07",
+                "fringe_08"
+            })
     void likelihoodWithAKnownBackgroundIsThatOfAMinimiser(String scan) throws IOException, ProblemException {
         JsonObject reference = expected(scan, "poisson_ml_fixed_background");
-        String drift = scan.equals("fringe_04") ? ",'driftOrder':1" : "";
+        String drift = model(scan);
 
         RecordView fit = fit(
                 scan,
@@ -85,10 +95,20 @@ class FringeFitsReferenceTest {
     }
 
     @ParameterizedTest
-    @ValueSource(strings = {"fringe_01", "fringe_02", "fringe_03", "fringe_04", "fringe_05", "fringe_07"})
+    @ValueSource(
+            strings = {
+                "fringe_01",
+                "fringe_02",
+                "fringe_03",
+                "fringe_04",
+                "fringe_05",
+                "fringe_06",
+                "fringe_07",
+                "fringe_08"
+            })
     void likelihoodTogetherWithTheDarkCountsIsThatOfAMinimiser(String scan) throws IOException, ProblemException {
         JsonObject reference = expected(scan, "poisson_ml_joint_with_dark");
-        String drift = scan.equals("fringe_04") ? ",'driftOrder':1" : "";
+        String drift = model(scan);
 
         RecordView fit = fit(
                 scan,
@@ -100,6 +120,16 @@ class FringeFitsReferenceTest {
                 fit.result().object("exposure").orElseThrow().number("si").orElseThrow();
         assertThat(Bench.value(fit, "background") / exposure)
                 .isCloseTo(number(reference, "B_rate"), within(EDM * number(reference, "sigma_B")));
+    }
+
+    /** What the programs fitted beside mean, visibility and phase. */
+    private static String model(String scan) {
+        return switch (scan) {
+            case "fringe_04" -> ",'driftOrder':1";
+            case "fringe_06" -> ",'secondHarmonic':true";
+            case "fringe_08" -> ",'phaseDrift':true";
+            default -> "";
+        };
     }
 
     private static void agrees(RecordView fit, JsonObject reference) {

@@ -18,7 +18,10 @@ final class Answers {
     static FitAnswer of(FringeFit fit, FitChoices choices, List<RowSource> rows) {
         Optional<Estimate> visibility = fit.visibility();
         double noise = fit.harmonic().quadratureNoise();
-        Optional<double[]> significance = fit.significance().map(Answers::pair);
+        // With a drifting phase there is no fit at visibility 0 to compare with, and the statistic is infinite: none is
+        // given.
+        Optional<double[]> significance =
+                fit.significance().map(Answers::pair).filter(pair -> Double.isFinite(pair[0]));
         return new FitAnswer(
                 fit.names(),
                 fit.values(),

@@ -114,12 +114,17 @@ public final class FitResult {
             deviance += fit.deviance();
             chiSquare += fit.chiSquare();
         }
-        JsonObject with = result.with("deviance", deviance).with("chiSquare", chiSquare);
+        JsonObject with = result.with("deviance", number(deviance)).with("chiSquare", number(chiSquare));
         if (answer.fits().size() == 1) {
             FringeGoodness goodness = answer.fits().get(0).goodness();
-            return goodness.degreesOfFreedom() > 0 ? with.with("p", goodness.pValue()) : with;
+            return goodness.degreesOfFreedom() > 0 ? with.with("p", number(goodness.pValue())) : with;
         }
-        return with.with("p", Chances.upper(deviance, Math.max(1, degreesOfFreedom())));
+        return with.with("p", number(Chances.upper(deviance, Math.max(1, degreesOfFreedom()))));
+    }
+
+    /** A number if it is one: least squares may expect fewer than no counts, where a deviance does not exist. */
+    private static Optional<Json> number(double value) {
+        return Double.isFinite(value) ? Optional.of(Json.of(value)) : Optional.empty();
     }
 
     private JsonObject fringe(JsonObject result) {
@@ -128,12 +133,16 @@ public final class FitResult {
         return result.with("fringe", fringe)
                 .with("visibility", visibility())
                 .with("visibilityCorrected", answer.visibility().flatMap(this::corrected))
-                .with("upperLimit", answer.limit().map(Json::of))
+                .with("upperLimit", answer.limit().filter(Double::isFinite).map(Json::of))
                 .with("phase", answer.phase().filter(FitResult::finite).map(FitResult::estimate));
     }
 
     private Optional<JsonObject> visibility() {
-        if (answer.visibility().isEmpty() || answer.interval().isEmpty()) {
+        boolean known = answer.visibility().filter(FitResult::finite).isPresent()
+                && answer.interval()
+                        .filter(interval -> Double.isFinite(interval.high()))
+                        .isPresent();
+        if (!known) {
             return Optional.empty();
         }
         return Optional.of(estimate(answer.visibility().get())
@@ -143,7 +152,7 @@ public final class FitResult {
 
     private Optional<Json> corrected(Estimate visibility) {
         double noise = answer.harmonic().quadratureNoise();
-        if (!(noise > 0) || !Double.isFinite(noise)) {
+        if (!(noise > 0) || !Double.isFinite(noise) || !finite(visibility)) {
             return Optional.empty();
         }
         double value = AmplitudeLimits.biasCorrected(visibility.value(), noise);
@@ -160,11 +169,11 @@ public final class FitResult {
     }
 
     private Optional<Json> backgroundRate() {
-        boolean measured = choices.backgroundSort().equals("channel")
-                || choices.backgroundSort().equals("scan");
+        boolean shared = choices.backgroundSort().equals("scan");
+        boolean measured = choices.backgroundSort().equals("channel") || shared;
         double counts = 0;
         double exposure = 0;
-        for (FringeFit fit : answer.fits()) {
+        for (FringeFit fit : shared ? answer.fits().subList(0, 1) : answer.fits()) {
             counts += fit.data().darkTotal();
             exposure += fit.data().darkExposureTotal();
         }

@@ -14,11 +14,15 @@ import fringekeep.interferometry.fringe.JointOutcome;
 import fringekeep.interferometry.fringe.ScanSum;
 import fringekeep.interferometry.fringe.SumOutcome;
 import fringekeep.interferometry.statistics.Estimate;
+import fringekeep.interferometry.statistics.SymmetricMatrix;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 
 /** Combines scans and fits them. A function of arrays, choices and parameters; the same call gives the same bits. */
 public final class FringeAnalysis {
+    private static final double SMALLEST_PIVOT = 1e-13;
+
     private final FitChoices choices;
     private final List<ScanArrays> scans;
     private final List<Estimate> referencePhases;
@@ -46,10 +50,24 @@ public final class FringeAnalysis {
             data.add(data(scan, parameters));
         }
         FringeOptions options = choices.options(parameters.period());
+        return finite(combined(data, options));
+    }
+
+    /** An estimate or covariance that is no number is no answer. */
+    private static FitAnswer finite(FitAnswer answer) throws ProblemException {
+        boolean numbers = Arrays.stream(answer.values()).allMatch(Double::isFinite)
+                && Arrays.stream(answer.covariance()).allMatch(Double::isFinite);
+        if (!numbers) {
+            throw new ProblemException(FitProblems.of("fit.not-determined", "", "An uncertainty is infinite."));
+        }
+        return answer;
+    }
+
+    private FitAnswer combined(List<FringeData> data, FringeOptions options) throws ProblemException {
         return switch (choices.combine()) {
             case SINGLE -> single(data.get(0), options, rows(scans.subList(0, 1)));
-            case SUM -> single(sum(ScanSum.plain(data)), options, rows(scans.subList(0, 1)));
-            case SUM_AFTER_PHASE -> single(afterPhase(data, options), options, rows(scans));
+            case SUM -> single(darkOnce(sum(ScanSum.plain(data))), options, rows(scans.subList(0, 1)));
+            case SUM_AFTER_PHASE -> single(darkOnce(afterPhase(data, options)), options, rows(scans));
             case JOINT -> joint(data, options);
         };
     }
@@ -78,7 +96,11 @@ public final class FringeAnalysis {
         if (outcome instanceof FringeFailure failure) {
             throw failed(failure);
         }
-        return outcome.orThrow();
+        FringeFit fit = outcome.orThrow();
+        if (!SymmetricMatrix.factor(fit.harmonic().covariance(), 3, SMALLEST_PIVOT)) {
+            throw new ProblemException(FitProblems.of("fit.covariance-singular", ""));
+        }
+        return fit;
     }
 
     private static ProblemException failed(FringeFailure failure) {
@@ -92,6 +114,12 @@ public final class FringeAnalysis {
                 referencePhases.isEmpty()
                         ? ScanSum.afterOwnPhase(data, options)
                         : ScanSum.afterPhase(data, referencePhases, options.period()));
+    }
+
+    /** Background scans belong to all scans together; counted once for each, they would seem more certain than they are. */
+    private FringeData darkOnce(FringeData sum) {
+        boolean shared = choices.backgroundSort().equals("scan");
+        return shared ? sum.dark(scans.get(0).dark(), scans.get(0).darkExposures()) : sum;
     }
 
     private static FringeData sum(SumOutcome outcome) throws ProblemException {
@@ -109,6 +137,7 @@ public final class FringeAnalysis {
     }
 
     private FitAnswer joint(List<FringeData> data, FringeOptions options) throws ProblemException {
+        refuseDriftToNothing(data, options);
         JointOutcome outcome = JointFit.of(data, options);
         if (outcome instanceof FringeFailure failure) {
             throw failed(failure);
@@ -119,6 +148,16 @@ public final class FringeAnalysis {
             return Answers.of(fit, choices, rows);
         }
         throw new AssertionError(outcome);
+    }
+
+    /** A scan whose own drift reaches no signal at some row says nothing of the visibility there. */
+    private void refuseDriftToNothing(List<FringeData> data, FringeOptions options) throws ProblemException {
+        for (int k = 0; k < data.size() && options.driftOrder() > 0; k++) {
+            if (fit(data.get(k), options).findings().contains(FringeFit.Finding.ON_EDGE)) {
+                throw new ProblemException(FitProblems.of(
+                        "fit.joint-drift", "/inputs/" + scans.get(k).input(), options.driftOrder()));
+            }
+        }
     }
 
     /** Rows that are used, in the order of the fitted data. */
