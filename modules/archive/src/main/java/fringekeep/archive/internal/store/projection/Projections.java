@@ -92,7 +92,15 @@ public final class Projections {
                 finish(c, name, watermark);
                 ready.put(name, pending(c, name));
             } else {
+                // From now on its rows are not kept up, so a program that declares it as it was must not take it as
+                // whole.
+                Sql.run(c, "delete from projection where name = ?", name);
                 unfilled.add(name);
+            }
+        }
+        for (String name : kept.keySet()) {
+            if (!declared.containsKey(name)) {
+                Sql.run(c, "delete from projection where name = ?", name);
             }
         }
         return unfilled;
