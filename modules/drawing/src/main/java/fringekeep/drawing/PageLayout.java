@@ -6,7 +6,8 @@ import java.util.List;
 
 /**
  * Lays the panels of a picture out on a page. Panels follow each other in rows of {@link Picture#columns()}; a panel shares
- * its horizontal axis with the one above it in its column when both axes are equal.
+ * its horizontal axis with the one above it in its column when both axes are equal and
+ * it has neither name nor heading of its own.
  */
 final class PageLayout {
     private final Picture picture;
@@ -119,8 +120,11 @@ final class PageLayout {
     }
 
     private static boolean sharedBelow(List<Panel> panels, int i) {
-        return i + 1 < panels.size()
-                && panels.get(i).x().equals(panels.get(i + 1).x());
+        if (i + 1 >= panels.size()) {
+            return false;
+        }
+        Panel next = panels.get(i + 1);
+        return panels.get(i).x().equals(next.x()) && Words.heading(next).isEmpty();
     }
 
     private static List<Panel> sharing(List<Panel> panels, int i) {

@@ -10,7 +10,8 @@ import java.util.List;
  * @param widthMillimetres width on paper (mm), &gt; 0
  * @param heightMillimetres height on paper (mm), &gt; 0
  * @param columns panels in a row, &ge; 1
- * @param panels the panels, in reading order; a panel may share its x axis with the one above (residuals below a fringe)
+ * @param panels the panels, in reading order; a panel without name and heading whose
+ *     x axis equals that of the one above shares it (residuals below a fringe)
  */
 public record Picture(
         String title, double widthMillimetres, double heightMillimetres, int columns, List<Panel> panels) {

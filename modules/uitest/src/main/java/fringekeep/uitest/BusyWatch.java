@@ -3,6 +3,7 @@ package fringekeep.uitest;
 import java.awt.AWTEvent;
 import java.awt.EventQueue;
 import java.awt.Toolkit;
+import java.awt.event.InvocationEvent;
 import java.util.Locale;
 import java.util.concurrent.atomic.AtomicLong;
 
@@ -33,13 +34,15 @@ final class BusyWatch extends EventQueue {
 
     @Override
     protected void dispatchEvent(AWTEvent event) {
+        // an invocation forgets what it ran once it is over
+        String before = event instanceof InvocationEvent ? event.toString() : "";
         long start = System.nanoTime();
         super.dispatchEvent(event);
         long busy = System.nanoTime() - start;
         if (busy > WORST_NANOSECONDS.get()) {
             WORST_NANOSECONDS.set(busy);
-            String words = event.toString();
-            worstEvent = words.substring(0, Math.min(160, words.length()));
+            String words = before.isEmpty() ? event.toString() : before;
+            worstEvent = words.substring(0, Math.min(240, words.length()));
         }
     }
 }

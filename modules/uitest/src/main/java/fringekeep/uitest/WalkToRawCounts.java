@@ -95,4 +95,11 @@ class WalkToRawCounts {
         person.waitFor("light", () -> !fringekeep.desk.look.Ink.dark() && desk.quiet());
         person.picture("scan-light");
     }
+
+    /** The aim is a quarter of a second; machines that build beside the test get more. */
+    @Test
+    @Order(6)
+    void theWindowThreadNeverWaitedLong() {
+        assertThat(BusyWatch.worstMilliseconds()).as(BusyWatch.report()).isLessThan(3000);
+    }
 }

@@ -121,7 +121,8 @@ public final class ReadSheet {
         Inputs inputs = archive.inputs(record);
         Optional<RecordKind> kind = Names.kind(archive, at);
         times.put(record, time(at, kind, inputs));
-        String label = Names.number(archive.label(record), at.head().kind().text());
+        String whole = archive.label(record);
+        String label = main ? Names.number(whole, kindName) : whole;
         return Optional.of(new Item(
                 record,
                 column.get(),
@@ -133,6 +134,9 @@ public final class ReadSheet {
 
     private String words(RecordView view) {
         for (String entry : stops.entry(view.head().kind().text(), "words")) {
+            if (entry.equals("none")) {
+                return "";
+            }
             int colon = entry.indexOf(':');
             Object word = joined.linked(view.fingerprint(), entry.substring(0, colon))
                     .map(other -> joined.row(other).values().get(entry.substring(colon + 1)))
@@ -181,7 +185,7 @@ public final class ReadSheet {
         for (Hash record : records) {
             for (Link link : register.graph().links(record)) {
                 if (link.sort() == LinkSort.INPUT && link.from().equals(record) && records.contains(link.to())) {
-                    steps.add(new Step(link.from(), link.to()));
+                    steps.add(new Step(link.from(), link.to(), link.role()));
                 }
             }
         }
@@ -198,7 +202,8 @@ public final class ReadSheet {
         Set<Hash> sharing = new HashSet<>();
         for (Timed one : timed) {
             List<Hash> before = steps.stream()
-                    .filter(step -> step.user().equals(one.item().record()))
+                    .filter(step -> step.user().equals(one.item().record())
+                            && step.role().equals(register.kind(step.input()).orElse("")))
                     .map(Step::input)
                     .filter(input -> Optional.ofNullable(byRecord.get(input))
                             .filter(host -> host.item().column() == one.item().column() - 1)

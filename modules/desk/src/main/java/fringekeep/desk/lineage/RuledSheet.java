@@ -10,10 +10,12 @@ import java.awt.Graphics;
 import java.awt.event.ActionEvent;
 import java.awt.event.MouseAdapter;
 import java.awt.event.MouseEvent;
+import java.util.List;
 import java.util.Optional;
 import java.util.function.Consumer;
 import java.util.function.Supplier;
 import javax.swing.AbstractAction;
+import javax.swing.BorderFactory;
 import javax.swing.JScrollPane;
 import javax.swing.KeyStroke;
 import javax.swing.ScrollPaneConstants;
@@ -34,16 +36,19 @@ public final class RuledSheet extends Painted {
      * A sheet.
      *
      * @param edges columns of the strip above
+     * @param words what several records of each stop are called
      * @param select told which record is in hand
      * @param open told which record is to be opened
      * @param back told that a person goes back
      */
-    public RuledSheet(Supplier<int[]> edges, Consumer<Hash> select, Consumer<Hash> open, Runnable back) {
+    public RuledSheet(
+            Supplier<int[]> edges, List<String> words, Consumer<Hash> select, Consumer<Hash> open, Runnable back) {
         this.edges = edges;
         this.select = select;
-        this.grid = new SheetGrid(edges);
+        this.grid = new SheetGrid(edges, words);
         this.scroll = new JScrollPane(grid);
         setOpaque(true);
+        scroll.setBorder(BorderFactory.createEmptyBorder());
         scroll.setHorizontalScrollBarPolicy(ScrollPaneConstants.HORIZONTAL_SCROLLBAR_NEVER);
         add(scroll);
         add(side);

@@ -67,6 +67,6 @@ public record Sheet(
     public record Item(
             Hash record, int column, String number, String title, Optional<StateName> state, double counts) {}
 
-    /** A link from a user to an input. */
-    public record Step(Hash user, Hash input) {}
+    /** A link from a user to an input, and the role it plays. */
+    public record Step(Hash user, Hash input, String role) {}
 }

@@ -33,12 +33,14 @@ final class SheetGrid extends Painted implements Scrollable {
     private static final Texts TEXTS = new Texts("fringekeep.desk.lineage.Texts", SheetGrid.class);
 
     private final transient Supplier<int[]> edges;
+    private final transient List<String> words;
     private transient Optional<SheetRows> rows = Optional.empty();
     private transient Set<Hash> thread = Set.of();
     private double most = 1;
 
-    SheetGrid(Supplier<int[]> edges) {
+    SheetGrid(Supplier<int[]> edges, List<String> words) {
         this.edges = edges;
+        this.words = List.copyOf(words);
         setFocusable(true);
         setOpaque(true);
         getAccessibleContext().setAccessibleName(TEXTS.of("sheet"));
@@ -173,7 +175,13 @@ final class SheetGrid extends Painted implements Scrollable {
         for (int column = 0; column + 1 < places.length; column++) {
             long count = gathered.count(column);
             if (count > 0) {
-                pen.fitted(TEXTS.of("gathered", count, ""), Type.BODY, Ink.INK, places[column] + 10.0, base, 60);
+                pen.fitted(
+                        TEXTS.of("gathered", count, words.get(column)),
+                        Type.BODY,
+                        Ink.INK,
+                        places[column] + 10.0,
+                        base,
+                        places[column + 1] - places[column] - 30.0);
                 pen.textEndingAt("+", Type.BODY, Ink.INK2, places[column + 1] - 8.0, base);
             }
         }

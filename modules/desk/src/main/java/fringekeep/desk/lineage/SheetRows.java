@@ -103,7 +103,7 @@ public final class SheetRows {
         boolean counts = row.items().stream().anyMatch(item -> item.counts() > 0);
         boolean apart = row.items().stream().anyMatch(ReadSheet::apart);
         key.append(row.words());
-        if (!counts || apart) {
+        if ((!counts && !row.words().isEmpty()) || apart) {
             return key.append('|').append(row.items().get(0).record().hex()).toString();
         }
         row.items().forEach(item -> key.append('|').append(item.column()));
@@ -209,7 +209,8 @@ public final class SheetRows {
 
     private static boolean nearer(Item from, Item other, Optional<Item> best) {
         int distance = Math.abs(other.column() - from.column());
-        return distance > 0 && (best.isEmpty() || distance < Math.abs(best.get().column() - from.column()));
+        return !other.record().equals(from.record())
+                && (best.isEmpty() || distance < Math.abs(best.get().column() - from.column()));
     }
 
     /** Goes up or down to the next record of the same column on screen, else of any column. */

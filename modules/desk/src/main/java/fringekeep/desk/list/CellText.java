@@ -25,14 +25,17 @@ final class CellText {
 
     /** Head of a column: {@code laser power / W}. */
     static ListContent.Head head(Column column) {
-        String label = column.label().isEmpty()
-                ? column.name()
-                : column.label().substring(0, 1).toLowerCase(Locale.ROOT)
-                        + column.label().substring(1);
+        String label = column.label().isEmpty() ? column.name() : lowered(column.label());
         String unit =
                 unit(column).map(Unit::shown).filter(text -> !text.equals("1")).orElse("");
         boolean right = column.sort() == Column.Sort.REAL || column.sort() == Column.Sort.INTEGER;
         return new ListContent.Head(unit.isEmpty() ? label : label + " / " + unit, right);
+    }
+
+    /** Words begin small; symbols such as P keep their case. */
+    private static String lowered(String label) {
+        boolean word = label.length() > 1 && Character.isLowerCase(label.charAt(1));
+        return word ? label.substring(0, 1).toLowerCase(Locale.ROOT) + label.substring(1) : label;
     }
 
     /** Text of a cell; a dash where there is no value. */

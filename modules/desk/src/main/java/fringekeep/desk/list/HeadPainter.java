@@ -52,8 +52,8 @@ final class HeadPainter extends Painted implements TableCellRenderer {
                 return;
             }
             boolean right = column > 0 && now.heads().get(column - 1).right();
-            String shown = Pen.shortened(text, Type.HEAD, room - 10.0);
-            double x = right ? room - 6 - Lettering.width(shown, Type.HEAD) : column == 0 ? 22 : 6;
+            String shown = Pen.shortened(text, Type.HEAD, room - 9.0);
+            double x = right ? room - 5 - Lettering.width(shown, Type.HEAD) : column == 0 ? 22 : 5;
             pen.text(shown, Type.HEAD, Ink.INK, x, 16);
             if (plot != null) {
                 scale(pen, plot, room, width);
@@ -64,15 +64,16 @@ final class HeadPainter extends Painted implements TableCellRenderer {
     private static void scale(Pen pen, ListContent.Plot plot, double from, double to) {
         double first = from + 8;
         double length = to - from - 20;
-        double free = first - 6;
-        for (double at = 0; at <= plot.to() + plot.step() / 2; at += plot.step()) {
-            String label = NumberText.significant(Math.rint(at / plot.step() * 1e6) / 1e6 * plot.step(), 3);
-            double width = Lettering.width(label, Type.SMALL);
-            double x = first + at / plot.to() * length - width / 2;
-            if (x > free) {
-                pen.text(label, Type.SMALL, Ink.INK2, x, 16);
-                free = x + width + 4;
-            }
+        double widest = Lettering.width(label(plot, plot.to()), Type.SMALL) + 6;
+        double every = Math.max(1, Math.ceil(widest / (plot.step() / plot.to() * length)));
+        for (double k = 0; k * plot.step() <= plot.to() + plot.step() / 2; k += every) {
+            String label = label(plot, k * plot.step());
+            double x = first + k * plot.step() / plot.to() * length;
+            pen.text(label, Type.SMALL, Ink.INK2, x - Lettering.width(label, Type.SMALL) / 2, 16);
         }
+    }
+
+    private static String label(ListContent.Plot plot, double at) {
+        return NumberText.significant(Math.rint(at / plot.step()) * plot.step(), 3);
     }
 }

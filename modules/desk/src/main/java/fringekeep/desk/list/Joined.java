@@ -8,12 +8,16 @@ import fringekeep.archive.graph.StateName;
 import fringekeep.archive.kind.RecordKind;
 import fringekeep.archive.kind.RecordView;
 import fringekeep.archive.listing.Column;
+import fringekeep.archive.listing.Listing;
+import fringekeep.archive.listing.Page;
 import fringekeep.archive.listing.Projection;
 import fringekeep.archive.listing.Row;
+import fringekeep.archive.problem.ProblemException;
 import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.KindName;
 import fringekeep.desk.session.Register;
 import java.util.HashMap;
+import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -23,7 +27,10 @@ import java.util.Set;
 public final class Joined {
     private final Archive archive;
     private final Register register;
+    private static final int PAGE = 10_000;
+    private static final int MOST = 50_000;
     private final Map<Hash, Row> rows = new HashMap<>();
+    private final Set<String> loaded = new HashSet<>();
 
     /** Reads from an archive at the register's watermark. */
     public Joined(Archive archive, Register register) {
@@ -53,7 +60,7 @@ public final class Joined {
         boolean preferred = false;
         for (Link link : graph.links(record)) {
             Hash other = link.from().equals(record) ? link.to() : link.from();
-            boolean counts = link.sort() == LinkSort.INPUT || link.sort() == LinkSort.ABOUT;
+            boolean counts = link.sort() == LinkSort.ABOUT || (link.sort() == LinkSort.INPUT && asItself(link));
             Set<StateName> states = graph.states(other);
             if (!counts
                     || !register.kind(other).orElse("").equals(kind)
@@ -70,14 +77,38 @@ public final class Joined {
         return best;
     }
 
-    private boolean newer(Hash one, Hash other) {
-        return archive.recorded(one).map(Archive.Recorded::n).orElse(0L)
-                > archive.recorded(other).map(Archive.Recorded::n).orElse(0L);
+    /** Whether the input plays the role of its own kind: a scan that is fitted, not one taken as reference. */
+    private boolean asItself(Link link) {
+        return link.role().equals(register.kind(link.to()).orElse(""));
     }
 
-    /** First row of a record in its kind's first table. */
+    private boolean newer(Hash one, Hash other) {
+        return register.place(one) > register.place(other);
+    }
+
+    /** First row of a record in its kind's first table; the whole table is read at the first asking. */
     public Row row(Hash record) {
+        register.kind(record).filter(loaded::add).ifPresent(this::load);
         return rows.computeIfAbsent(record, this::read);
+    }
+
+    private void load(String kind) {
+        Optional<Projection> table = table(archive, kind);
+        if (table.isEmpty()) {
+            return;
+        }
+        Optional<Page.Key> after = Optional.empty();
+        try {
+            do {
+                Page page = archive.list(new Listing(
+                        table.get().name(), List.of(), true, List.of(), Optional.empty(), "n", false, after, PAGE));
+                page.rows().forEach(line -> rows.putIfAbsent(line.record(), line.row()));
+                after = page.last();
+            } while (after.isPresent() && rows.size() < MOST);
+        } catch (ProblemException e) {
+            throw new IllegalStateException(
+                    "a declared table cannot be read: " + table.get().name(), e);
+        }
     }
 
     private Row read(Hash record) {

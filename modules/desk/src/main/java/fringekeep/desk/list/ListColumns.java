@@ -10,9 +10,9 @@ import javax.swing.table.TableColumnModel;
 /** Gives columns the width their texts need; those that have no room are narrowed to nothing from the right. */
 final class ListColumns {
     /** Width of the plot column at most. */
-    static final int PLOT = 100;
+    static final int PLOT = 88;
 
-    private static final int MARK = 88;
+    private static final int MARK = 80;
     private static final int SAMPLE = 300;
 
     private final JTable table;
@@ -50,7 +50,7 @@ final class ListColumns {
     }
 
     private int needed(ListContent content, int column) {
-        double widest = Lettering.width(table.getModel().getColumnName(column), Type.HEAD);
+        double widest = Math.min(72, Lettering.width(table.getModel().getColumnName(column), Type.HEAD));
         int seen = 0;
         for (ListContent.Line line : content.rows()) {
             if (line instanceof Entry entry && seen++ < SAMPLE) {
@@ -58,7 +58,7 @@ final class ListColumns {
                 widest = Math.max(widest, Lettering.width(text, column == 0 ? Type.BODY_MEDIUM : Type.BODY));
             }
         }
-        return (int) Math.ceil(Math.min(widest, 190)) + 18 + (column == 0 ? 6 : 0);
+        return (int) Math.ceil(Math.min(widest, 190)) + 13 + (column == 0 ? 20 : 0);
     }
 
     private static void set(TableColumn column, int width) {

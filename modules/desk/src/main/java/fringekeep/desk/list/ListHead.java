@@ -86,6 +86,11 @@ final class ListHead extends Painted {
             }
             double x = Math.max(headingEnd + 14, getWidth() - total);
             for (Word word : content.words()) {
+                double width = Lettering.width(text(word), word.chosen() ? Type.HEAD : Type.SMALL);
+                if (x + width > getWidth() + 1) {
+                    places.add(new Rectangle());
+                    continue;
+                }
                 x = word(pen, word, x) + 10;
             }
         }

@@ -75,8 +75,16 @@ public final class ReadList {
 
     private String heading(String kind) {
         int count = register.current(kind).size();
-        String word = Stops.label(kind);
-        return NumberText.count(count) + " " + (count == 1 ? word : TEXTS.orElse("plural." + kind, word + "s"));
+        return NumberText.count(count) + " " + (count == 1 ? Stops.label(kind) : plural(kind));
+    }
+
+    /** What several records of the main kind of each stop are called. */
+    public static List<String> plurals(Stops stops) {
+        return stops.all().stream().map(stop -> plural(stop.kind())).toList();
+    }
+
+    private static String plural(String kind) {
+        return TEXTS.orElse("plural." + kind, Stops.label(kind) + "s");
     }
 
     private List<Word> words(Question question) {
@@ -105,11 +113,7 @@ public final class ReadList {
             for (String other : stops.all().get(stop).kinds()) {
                 int count = register.current(other).size();
                 if (!other.equals(kind) && count > 0) {
-                    words.add(new Word(
-                            TEXTS.orElse("plural." + other, Stops.label(other) + "s"),
-                            count,
-                            Question.all(other),
-                            false));
+                    words.add(new Word(plural(other), count, Question.all(other), false));
                 }
             }
         });

@@ -13,6 +13,7 @@ import java.util.Optional;
 import java.util.OptionalInt;
 import java.util.function.Consumer;
 import javax.swing.AbstractAction;
+import javax.swing.BorderFactory;
 import javax.swing.JPanel;
 import javax.swing.JScrollPane;
 import javax.swing.JTable;
@@ -49,6 +50,7 @@ public final class RecordList extends JPanel {
         add(head, BorderLayout.NORTH);
         add(scroll, BorderLayout.CENTER);
         setOpaque(true);
+        scroll.setBorder(BorderFactory.createEmptyBorder());
         table.setSelectionMode(ListSelectionModel.SINGLE_SELECTION);
         table.setFillsViewportHeight(true);
         table.setRowHeight(22);

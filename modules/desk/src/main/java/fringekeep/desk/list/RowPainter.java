@@ -72,7 +72,7 @@ final class RowPainter extends Painted implements TableCellRenderer {
         if (column == 0) {
             Font font = selected ? Type.BODY_MEDIUM : Type.BODY;
             Ink ink = entry.struck() ? Ink.INK3 : Ink.INK;
-            pen.fitted(entry.number(), font, ink, 22, base, width - 24.0);
+            pen.fitted(entry.number(), font, ink, 22, base, width - 22.0);
             if (entry.struck()) {
                 pen.strike(entry.number(), font, ink, 22, base);
             }
@@ -83,8 +83,8 @@ final class RowPainter extends Painted implements TableCellRenderer {
             cell(pen, entry, width, height, base);
         } else {
             entry.state().ifPresent(state -> {
-                States.mark(state).paint(pen.graphics(), 8, height / 2.0 - 6.5, 12);
-                pen.fitted(States.word(state), Type.SMALL, Ink.INK, 24, base, width - 26.0);
+                States.mark(state).paint(pen.graphics(), 4, height / 2.0 - 6.5, 12);
+                pen.fitted(States.word(state), Type.SMALL, Ink.INK, 20, base, width - 20.0);
             });
         }
     }
@@ -98,9 +98,9 @@ final class RowPainter extends Painted implements TableCellRenderer {
         }
         String text = entry.cells().get(column - 1);
         Ink ink = entry.struck() ? Ink.INK3 : column == 1 ? Ink.INK2 : Ink.INK;
-        String shown = Pen.shortened(text, Type.BODY, room - 10.0);
+        String shown = Pen.shortened(text, Type.BODY, room - 9.0);
         boolean right = content.get().heads().get(column - 1).right();
-        double x = right ? room - 6 - Lettering.width(shown, Type.BODY) : 6;
+        double x = right ? room - 5 - Lettering.width(shown, Type.BODY) : 5;
         pen.text(shown, Type.BODY, ink, x, base);
         if (entry.struck() && right) {
             pen.strike(shown, Type.BODY, ink, x, base);

@@ -116,7 +116,7 @@ public enum Mark {
             case CORNER -> lines(2, 1.5, 2, 10, 10.5, 10);
             case HERE -> box(1.5, 1.5, 9, 9);
             case LINKED -> box(4.9, 1, 2.2, 10);
-            case QUESTION -> closed(6, 1.5, 11, 10.5, 1, 10.5);
+            case QUESTION -> closed(6, 2.4, 10.6, 10.5, 1.4, 10.5);
             case CANNOT_TELL -> closed(2, 2, 10, 2, 10, 10, 2, 10);
             case WITHHELD ->
                 closed(1.5, 1.5, 10.5, 1.5, 10.5, 10.5, 1.5, 10.5)

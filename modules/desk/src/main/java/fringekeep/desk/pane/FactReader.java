@@ -20,6 +20,8 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 
 /**
  * Turns the JSON of a part into ruled facts without knowing its kind: quantities with what was entered and the uncertainty in
@@ -27,6 +29,9 @@ import java.util.Optional;
  */
 public final class FactReader {
     private static final int LIST = 8;
+    private static final Pattern INSTANT =
+            Pattern.compile("[0-9]{4}-[0-9]{2}-[0-9]{2}T[0-9]{2}:[0-9]{2}:[0-9]{2}(\\.[0-9]+)?Z");
+    private static final Pattern BRACKETED = Pattern.compile("\\(([^() ]+)\\)[^()]*$");
     private static final List<String> NAMED = List.of("W", "J", "Pa", "V", "A", "N", "C", "T", "K", "Ohm", "F");
 
     private final Clock clock;
@@ -73,13 +78,14 @@ public final class FactReader {
             Optional<Fact> whole = whole(name, object, at);
             if (whole.isPresent()) {
                 add(group, whole.get());
+                further(group, name, object, whole.get().unit());
             } else {
                 object(top ? name : group, top ? "" : name, object, at, false);
             }
         } else if (value instanceof JsonArray array) {
             array(top ? name : group, group, name, array, at);
         } else {
-            add(group, Fact.text(name, plain(value)).withUnit(unit(at)));
+            add(group, Fact.text(name, instantOr(plain(value))).withUnit(unit(at)));
         }
     }
 
@@ -111,8 +117,26 @@ public final class FactReader {
             Map.Entry<String, Json> only = item.members().entrySet().iterator().next();
             any(group, title, only.getValue(), property(at, only.getKey()), false);
         } else {
-            object(group, title, item, at, false);
+            objectOrLine(group, title, item, at);
         }
+    }
+
+    /** A thing of texts and numbers only is one line. */
+    private void objectOrLine(String group, String title, JsonObject item, JsonObject at) {
+        boolean flat = item.members().values().stream()
+                .noneMatch(value -> value instanceof JsonObject || value instanceof JsonArray);
+        if (!flat) {
+            object(group, title, item, at, false);
+            return;
+        }
+        List<String> line = new ArrayList<>();
+        item.members().forEach((name, value) -> {
+            String text = plain(value);
+            if (!text.isEmpty()) {
+                line.add(value instanceof JsonText ? text : words(name) + " " + text);
+            }
+        });
+        add(group, Fact.text(title, String.join(", ", line)));
     }
 
     private static String list(List<Json> items) {
@@ -133,7 +157,7 @@ public final class FactReader {
             return Optional.of(quantity(name, object));
         }
         if (object.number("value").isPresent()
-                && object.members().keySet().stream().allMatch(List.of("value", "u", "unit", "name")::contains)) {
+                && object.members().values().stream().allMatch(JsonNumber.class::isInstance)) {
             double u = object.number("u").orElse(Double.NaN);
             String unit = object.text("unit").map(FactReader::shown).orElseGet(() -> unit(at));
             return Optional.of(new Fact(
@@ -143,6 +167,22 @@ public final class FactReader {
             return Optional.of(Fact.text(name, moment(object.text("at").get())));
         }
         return Optional.empty();
+    }
+
+    /** Numbers beside a value and its uncertainty, such as statistical and shared parts or the ends of an interval. */
+    private void further(String group, String name, JsonObject object, String unit) {
+        if (object.number("value").isEmpty()) {
+            return;
+        }
+        object.members().forEach((member, value) -> {
+            if (value instanceof JsonNumber number && !member.equals("value") && !member.equals("u")) {
+                add(group, new Fact(name + ", " + words(member), "", NumberText.significant(number.value(), 3), unit));
+            }
+        });
+    }
+
+    private String instantOr(String text) {
+        return INSTANT.matcher(text).matches() ? moment(text) : text;
     }
 
     private String moment(String at) {
@@ -240,11 +280,27 @@ public final class FactReader {
         return schema.object("properties").flatMap(all -> all.object(name)).orElse(JsonObject.EMPTY);
     }
 
+    /** Unit of a number: named by the schema, or told in brackets at the end of its description. */
     private static String unit(JsonObject schema) {
         return schema.text("siUnit")
                 .or(() -> schema.text("unit"))
+                .or(() -> schema.text("description").flatMap(FactReader::bracketed))
                 .map(FactReader::shown)
                 .orElse("");
+    }
+
+    private static Optional<String> bracketed(String description) {
+        Matcher matcher = BRACKETED.matcher(description);
+        return matcher.find() ? Optional.of(matcher.group(1)).filter(FactReader::isUnit) : Optional.empty();
+    }
+
+    private static boolean isUnit(String code) {
+        try {
+            Units.parse(code);
+            return true;
+        } catch (ProblemException e) {
+            return false; // other words in brackets
+        }
     }
 
     private static String shown(String code) {
@@ -274,6 +330,9 @@ public final class FactReader {
     }
 
     private static String singular(String name) {
+        if (name.endsWith("ies") && !name.endsWith("series")) {
+            return name.substring(0, name.length() - 3) + "y";
+        }
         return name.endsWith("s") && !name.endsWith("ss") && !name.endsWith("series")
                 ? name.substring(0, name.length() - 1)
                 : name;

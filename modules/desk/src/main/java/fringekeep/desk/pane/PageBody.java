@@ -2,6 +2,7 @@ package fringekeep.desk.pane;
 
 import fringekeep.desk.look.Ink;
 import fringekeep.desk.look.Painted;
+import fringekeep.drawing.Picture;
 import fringekeep.drawing.PictureView;
 import java.awt.Dimension;
 import java.awt.Graphics;
@@ -57,7 +58,7 @@ final class PageBody extends Painted implements Scrollable {
         int y = 8;
         boolean narrow = width < 520;
         int besideWidth = beside.isPresent() && !narrow ? BesidePanel.WIDTH + GAP : 0;
-        int tall = Math.max(220, Math.min(520, (int) (sight * (facts.size() > 3 ? 0.52 : 0.62))));
+        int pictureWidth = Math.max(100, width - besideWidth);
         int besideBottom = y;
         if (beside.isPresent()) {
             Dimension size = beside.get().getPreferredSize();
@@ -67,13 +68,23 @@ final class PageBody extends Painted implements Scrollable {
             besideBottom = y + size.height;
         }
         for (PictureView picture : pictures) {
+            int tall = tall(picture, pictureWidth);
             if (move) {
-                picture.setBounds(0, y, Math.max(100, width - besideWidth), tall);
+                picture.setBounds(0, y, pictureWidth, tall);
             }
             y += tall + 10;
         }
         y = Math.max(y, besideBottom + 10);
         return columns(width, y, move);
+    }
+
+    /** A drawing keeps its shape on paper, but one row of panels takes no more than about half of what is in sight. */
+    private int tall(PictureView view, int width) {
+        Picture picture = view.picture();
+        double wanted = width * picture.heightMillimetres() / picture.widthMillimetres();
+        boolean rows = picture.columns() > 1 && picture.panels().size() > picture.columns();
+        double most = sight * (rows ? 0.95 : facts.size() > 3 ? 0.52 : 0.62);
+        return (int) Math.max(220, Math.min(wanted, most));
     }
 
     private int columns(int width, int top, boolean move) {

@@ -27,6 +27,7 @@ import fringekeep.desk.session.Stops;
 import fringekeep.drawing.NumberText;
 import fringekeep.drawing.Picture;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
@@ -113,6 +114,7 @@ public final class ReadRecord {
         groups.addAll(tables(view));
         groups.addAll(part(view, PartName.REMARK));
         groups.addAll(part(view, PartName.MADE));
+        groups.sort(Comparator.comparing(group -> !group.entered()));
         return groups;
     }
 

@@ -24,11 +24,17 @@ public final class Register {
     private final Graph graph;
     private final Map<String, List<Hash>> byKind;
     private final Map<Hash, String> kindOf;
+    private final Map<Hash, Integer> placeOf = new HashMap<>();
 
     private Register(Graph graph, Map<String, List<Hash>> byKind, Map<Hash, String> kindOf) {
         this.graph = graph;
         this.byKind = byKind;
         this.kindOf = kindOf;
+        byKind.values().forEach(records -> {
+            for (int i = 0; i < records.size(); i++) {
+                placeOf.put(records.get(i), i);
+            }
+        });
     }
 
     /** Reads all records of all kinds. */
@@ -69,6 +75,11 @@ public final class Register {
     /** Kind of a record that is at hand. */
     public Optional<String> kind(Hash record) {
         return Optional.ofNullable(kindOf.get(record));
+    }
+
+    /** Place of a record among those of its kind, in journal order; -1 if it is not at hand. */
+    public int place(Hash record) {
+        return placeOf.getOrDefault(record, -1);
     }
 
     /** Records of a kind in journal order, corrected ones too. */

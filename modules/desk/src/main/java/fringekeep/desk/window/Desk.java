@@ -77,7 +77,8 @@ public final class Desk extends JPanel {
         this.record =
                 new RecordPane(List.of(new PageAction(TEXTS.of("trace"), 'T', this::trace)), this::follow, host::save);
         this.panes = new TwoPanes(list, record, width -> memory.put("list width", Integer.toString(width)));
-        this.lineage = new RuledSheet(strip::columns, this::selectInSheet, this::open, this::back);
+        this.lineage =
+                new RuledSheet(strip::columns, ReadList.plurals(stops), this::selectInSheet, this::open, this::back);
         this.first = new FirstSheet(host::chooseArchive, host::foundArchive);
         assemble();
         new DeskKeys(this).bind();
@@ -153,6 +154,13 @@ public final class Desk extends JPanel {
         top.setVisible(false);
         showCard("first");
         showStatus();
+    }
+
+    /** Closes the archive before the program ends; waits until its last words are written. */
+    void closeForGood() {
+        runner.stop();
+        archive.ifPresent(Archive::close);
+        archive = Optional.empty();
     }
 
     private static Boolean close(Archive open) {

@@ -51,7 +51,7 @@ public final class Installer extends ModuleInstall {
 
     @Override
     public boolean closing() {
-        Program.only().desk().closeArchive();
+        Program.only().desk().closeForGood();
         return true;
     }
 }

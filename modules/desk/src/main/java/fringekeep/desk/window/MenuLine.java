@@ -50,7 +50,8 @@ public final class MenuLine {
     }
 
     private static void about(Program program) {
-        program.trouble(List.of(new Problem("desk.about", TEXTS.of("about", "1.0.0"), "", "")));
+        program.say(
+                TEXTS.of("menu.help.about"), List.of(new Problem("desk.about", TEXTS.of("about", "1.0.0"), "", "")));
     }
 
     private static JMenu menu(JMenuBar bar, String key, char mnemonic) {

@@ -162,6 +162,11 @@ public final class Program implements DeskHost {
         ProblemDialog.show(window(), TEXTS.of("trouble.title"), problems);
     }
 
+    /** Says something in words. */
+    void say(String title, List<Problem> words) {
+        ProblemDialog.show(window(), title, words);
+    }
+
     /** Shows that something unforeseen happened, with the place of the log. */
     void crashed(Throwable fault, String log) {
         Problem problem = new Problem(

@@ -1,0 +1,3 @@
+/** Tests on the assembled application. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.application;
