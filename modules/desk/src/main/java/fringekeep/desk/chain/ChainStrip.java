@@ -14,6 +14,7 @@ import java.util.List;
 import java.util.Optional;
 import javax.swing.AbstractAction;
 import javax.swing.JComponent;
+import javax.swing.JLabel;
 import javax.swing.JTextField;
 import javax.swing.KeyStroke;
 
@@ -49,6 +50,10 @@ public final class ChainStrip extends Painted {
         }
         find.putClientProperty("JTextField.placeholderText", TEXTS.of("find"));
         find.putClientProperty("JTextField.showClearButton", true);
+        JLabel key = new JLabel(TEXTS.of("find.key"));
+        key.setFont(Type.SMALL);
+        key.setEnabled(false);
+        find.putClientProperty("JTextField.trailingComponent", key);
         find.setFont(Type.BODY);
         find.getAccessibleContext().setAccessibleName(TEXTS.of("find.name"));
         find.addActionListener(event -> listener.find(find.getText()));

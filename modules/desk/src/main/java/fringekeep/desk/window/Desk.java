@@ -2,7 +2,6 @@ package fringekeep.desk.window;
 
 import fringekeep.archive.Archive;
 import fringekeep.archive.graph.StateName;
-import fringekeep.archive.problem.Problem;
 import fringekeep.archive.record.Hash;
 import fringekeep.desk.chain.ChainListener;
 import fringekeep.desk.chain.ChainState;
@@ -82,7 +81,13 @@ public final class Desk extends JPanel {
         this.first = new FirstSheet(host::chooseArchive, host::foundArchive);
         assemble();
         new DeskKeys(this).bind();
-        runner.onTrouble(host::trouble);
+        runner.onTrouble(problems -> {
+            if (archive.isPresent()) {
+                caution.show(problems);
+            } else {
+                host.trouble(problems);
+            }
+        });
         runner.onProgress(this::showProgress);
         showStatus();
     }
@@ -180,6 +185,7 @@ public final class Desk extends JPanel {
 
     private void arrived(Register next) {
         register = Optional.of(next);
+        caution.show(List.of());
         if (place.inHand().isEmpty()) {
             place = new Place(firstFilled(next), place.question(), Optional.empty(), place.sheet(), place.root());
             place = new Place(
@@ -424,11 +430,6 @@ public final class Desk extends JPanel {
     }
 
     // ---- what is said
-
-    /** Says what is wrong with the archive, below the strip. */
-    void caution(List<Problem> problems) {
-        caution.show(problems);
-    }
 
     private void showProgress(Optional<Progress> now) {
         progress.show(now);

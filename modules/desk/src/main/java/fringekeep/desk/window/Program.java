@@ -9,6 +9,8 @@ import fringekeep.archive.Circumstances;
 import fringekeep.archive.kind.Kinds;
 import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
+import fringekeep.archive.problem.StoppedException;
+import fringekeep.archive.problem.Work;
 import fringekeep.desk.look.Ink;
 import fringekeep.desk.look.Texts;
 import fringekeep.desk.run.Runner;
@@ -77,13 +79,24 @@ public final class Program implements DeskHost {
 
     /** Opens an archive. */
     public void openArchive(Path folder) {
-        runner.run(
-                "open",
-                work -> {
-                    work.progress(0, 0, TEXTS.of("status.opening", String.valueOf(folder.getFileName())));
-                    return Archives.open(folder, kinds(), Circumstances.real(BUILD));
-                },
-                archive -> opened(folder, archive));
+        Path whole = folder.toAbsolutePath().normalize();
+        boolean open = desk.archive()
+                .filter(archive ->
+                        archive.facts().folder().toAbsolutePath().normalize().equals(whole))
+                .isPresent();
+        if (!open) {
+            runner.run("open", work -> open(whole, work), archive -> opened(whole, archive), this::trouble);
+        }
+    }
+
+    private static Archive open(Path folder, Work work) throws ProblemException, StoppedException {
+        work.progress(0, 0, TEXTS.of("status.opening", String.valueOf(folder.getFileName())));
+        Archive archive = Archives.open(folder, kinds(), Circumstances.real(BUILD));
+        if (work.stopped()) {
+            archive.close(); // another one was asked for meanwhile
+            throw new StoppedException();
+        }
+        return archive;
     }
 
     private void opened(Path folder, Archive archive) {
@@ -126,7 +139,8 @@ public final class Program implements DeskHost {
                                                 Optional.empty()),
                                         kinds(),
                                         Circumstances.real(BUILD)),
-                                archive -> opened(answers.folder(), archive)));
+                                archive -> opened(answers.folder(), archive),
+                                this::trouble));
     }
 
     @Override
@@ -136,7 +150,7 @@ public final class Program implements DeskHost {
         chooser.setSelectedFile(new File("drawing.svg"));
         if (chooser.showSaveDialog(desk) == JFileChooser.APPROVE_OPTION) {
             Path file = chooser.getSelectedFile().toPath();
-            runner.run("save", work -> write(picture, file), done -> {});
+            runner.run("save", work -> write(picture, file), done -> {}, this::trouble);
         }
     }
 
