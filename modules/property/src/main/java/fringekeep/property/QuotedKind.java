@@ -17,7 +17,6 @@ import fringekeep.archive.problem.ProblemException;
 import fringekeep.archive.quantity.Quantity;
 import fringekeep.archive.quantity.QuantityJson;
 import fringekeep.archive.quantity.Uncertainty;
-import fringekeep.archive.quantity.Unit;
 import fringekeep.archive.quantity.Units;
 import fringekeep.archive.quantity.ValueText;
 import fringekeep.archive.record.KindName;
@@ -154,10 +153,7 @@ public final class QuotedKind implements RecordKind {
 
     private static String asQuoted(RecordView record) {
         return quantity(record)
-                .map(quantity -> {
-                    Unit unit = Units.of(quantity.unit());
-                    return shortened(ValueText.entered(quantity) + " " + unit.shown());
-                })
+                .map(quantity -> shortened(ValueText.entered(quantity)))
                 .orElse("");
     }
 

@@ -14,6 +14,6 @@ final class Settings {
     static Setting of(String name, JsonObject json) {
         Quantity quantity = QuantityJson.read(json);
         return new Setting(
-                name, quantity.si(), QuantityJson.deviation(quantity), quantity.unit(), ValueText.entered(quantity));
+                name, quantity.si(), QuantityJson.deviation(quantity), quantity.unit(), ValueText.brief(quantity));
     }
 }

@@ -87,6 +87,18 @@ public final class ValueText {
         return text + unit + " " + (uncertainty instanceof Uncertainty.Exact ? EXACT : NOT_STATED);
     }
 
+    /** A quantity as entered, for titles: says nothing where the uncertainty is exact or not stated. */
+    public static String brief(Quantity quantity) {
+        String whole = entered(quantity);
+        Uncertainty uncertainty = quantity.uncertainty();
+        if (uncertainty instanceof Uncertainty.Exact) {
+            return whole.substring(0, whole.length() - EXACT.length() - 1);
+        }
+        return uncertainty instanceof Uncertainty.Unstated
+                ? whole.substring(0, whole.length() - NOT_STATED.length() - 1)
+                : whole;
+    }
+
     private static String brackets(String text, String deviation) {
         boolean plain = text.indexOf('e') < 0 && deviation.indexOf('e') < 0;
         BigDecimal spread = new BigDecimal(deviation);

@@ -130,7 +130,10 @@ public final class BagFaults {
         if (sums == null) {
             fault("bundle.missing-file", path + " is listed but not there.", where);
         } else if (!parts.group(1).equalsIgnoreCase(sums.get(algorithm))) {
-            fault("bundle.changed-file", path + " was changed: its " + algorithm + " differs from the list.", path);
+            fault(
+                    "bundle.changed-file",
+                    path + " was changed, or its line in " + manifest + ": the " + algorithm + " differs.",
+                    path);
         }
     }
 

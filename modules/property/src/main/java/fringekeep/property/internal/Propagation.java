@@ -57,24 +57,39 @@ final class Propagation {
         this.fit = fit;
     }
 
+    /** Each shared parameter by itself, so the work is spread over the cores; the order of the answer is that of the list. */
     Found run() {
+        List<Answer> answers = question.shared().parallelStream()
+                .map(this::answer)
+                .flatMap(Optional::stream)
+                .toList();
         List<Sensitive> sensitivities = new ArrayList<>();
         List<String> notStated = new ArrayList<>();
-        for (Shared shared : question.shared()) {
-            if (shared.deviation().isEmpty()) {
-                notStated.add(shared.words());
-            } else if (shared.deviation().getAsDouble() > 0) {
-                double step = STEP * shared.deviation().getAsDouble();
-                Optional<double[]> above = moved(new Shift(shared, step));
-                Optional<double[]> below = moved(new Shift(shared, -step));
-                if (above.isPresent() && below.isPresent()) {
-                    sensitivities.add(new Sensitive(shared, slopes(above.get(), below.get(), step)));
-                } else {
-                    notStated.add(shared.words() + " (the fit cannot be followed along it)");
-                }
-            }
+        for (Answer answer : answers) {
+            answer.sensitive().ifPresent(sensitivities::add);
+            answer.notStated().ifPresent(notStated::add);
         }
         return new Found(sensitivities, notStated);
+    }
+
+    private record Answer(Optional<Sensitive> sensitive, Optional<String> notStated) {}
+
+    private Optional<Answer> answer(Shared shared) {
+        if (shared.deviation().isEmpty()) {
+            return Optional.of(new Answer(Optional.empty(), Optional.of(shared.words())));
+        }
+        if (!(shared.deviation().getAsDouble() > 0)) {
+            return Optional.empty();
+        }
+        double step = STEP * shared.deviation().getAsDouble();
+        Optional<double[]> above = moved(new Shift(shared, step));
+        Optional<double[]> below = moved(new Shift(shared, -step));
+        if (above.isEmpty() || below.isEmpty()) {
+            String words = shared.words() + " (the fit cannot be followed along it)";
+            return Optional.of(new Answer(Optional.empty(), Optional.of(words)));
+        }
+        return Optional.of(new Answer(
+                Optional.of(new Sensitive(shared, slopes(above.get(), below.get(), step))), Optional.empty()));
     }
 
     private static double[] slopes(double[] above, double[] below, double step) {

@@ -21,8 +21,8 @@ import java.util.Optional;
 
 /** How properties stand in lists and tables. */
 public final class PropertyRows {
-    private static final Column VOLUME = Column.real("volume_m3", "polarizability volume", "m3", "Ao3");
-    private static final Column SECTION = Column.real("cross_section_m2", "absorption cross section", "m2", "m2");
+    private static final Column VOLUME = Column.real("volume_m3", "volume", "m3", "Ao3");
+    private static final Column SECTION = Column.real("cross_section_m2", "absorption", "m2", "m2");
 
     /** The list of properties. */
     public static final Projection PROPERTIES = new Projection(
