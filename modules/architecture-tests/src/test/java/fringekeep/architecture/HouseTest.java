@@ -54,21 +54,22 @@ class HouseTest {
 
     @TestFactory
     Stream<DynamicTest> aModuleUsesOnlyWhatStandsBeforeIt() {
-        return mayUse().entrySet().stream().map(entry -> DynamicTest.dynamicTest(entry.getKey(), () -> {
-            List<String> forbidden = mayUse().keySet().stream()
-                    .filter(other -> !other.equals(entry.getKey()))
-                    .filter(other -> !entry.getValue().contains(other))
-                    .map(other -> "fringekeep." + other + "..")
-                    .toList();
-            noClasses()
-                    .that()
-                    .resideInAPackage("fringekeep." + entry.getKey() + "..")
-                    .and()
-                    .resideOutsideOfPackage("fringekeep." + entry.getKey() + ".ui..")
-                    .should()
-                    .dependOnClassesThat(resideInAnyPackage(forbidden.toArray(String[]::new)))
-                    .check(ALL);
-        }));
+        return mayUse().entrySet().stream()
+                .map(entry -> DynamicTest.dynamicTest(entry.getKey(), () -> {
+                    List<String> forbidden = mayUse().keySet().stream()
+                            .filter(other -> !other.equals(entry.getKey()))
+                            .filter(other -> !entry.getValue().contains(other))
+                            .map(other -> "fringekeep." + other + "..")
+                            .toList();
+                    noClasses()
+                            .that()
+                            .resideInAPackage("fringekeep." + entry.getKey() + "..")
+                            .and()
+                            .resideOutsideOfPackage("fringekeep." + entry.getKey() + ".ui..")
+                            .should()
+                            .dependOnClassesThat(resideInAnyPackage(forbidden.toArray(String[]::new)))
+                            .check(ALL);
+                }));
     }
 
     @Test

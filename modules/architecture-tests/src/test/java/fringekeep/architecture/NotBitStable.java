@@ -10,8 +10,8 @@ import java.util.Set;
 /** Calls of {@code java.lang.Math} that a platform may answer differently in the last bit. */
 final class NotBitStable {
     private static final Set<String> FUNCTIONS = Set.of(
-            "sin", "cos", "tan", "asin", "acos", "atan", "atan2", "exp", "expm1", "log", "log10", "log1p", "pow", "cbrt",
-            "sinh", "cosh", "tanh", "hypot");
+            "sin", "cos", "tan", "asin", "acos", "atan", "atan2", "exp", "expm1", "log", "log10", "log1p", "pow",
+            "cbrt", "sinh", "cosh", "tanh", "hypot");
 
     static final ArchCondition<JavaClass> CALLS = new ArchCondition<>("call transcendental functions of Math") {
         @Override

@@ -11,6 +11,7 @@ import fringekeep.bundle.internal.Contents;
 import fringekeep.bundle.internal.Layout;
 import fringekeep.bundle.internal.Writing;
 import fringekeep.bundle.internal.Zip;
+import fringekeep.bundle.stated.BundleSettings;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;

@@ -11,7 +11,7 @@ import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.InputReference;
 import fringekeep.archive.record.Moment;
 import fringekeep.archive.record.PartName;
-import fringekeep.scan.internal.ScanProblems;
+import fringekeep.scan.internal.problem.ScanProblems;
 import fringekeep.scan.internal.reading.FileReader;
 import fringekeep.scan.internal.reading.Profile;
 import fringekeep.scan.internal.reading.Reading;

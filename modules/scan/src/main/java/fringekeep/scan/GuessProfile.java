@@ -6,7 +6,7 @@ import fringekeep.archive.graph.StateName;
 import fringekeep.archive.kind.RecordView;
 import fringekeep.archive.problem.ProblemException;
 import fringekeep.archive.record.Hash;
-import fringekeep.scan.internal.ScanProblems;
+import fringekeep.scan.internal.problem.ScanProblems;
 import fringekeep.scan.internal.reading.FileReader;
 import fringekeep.scan.internal.reading.Finding;
 import fringekeep.scan.internal.reading.Profile;

@@ -13,7 +13,7 @@ import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.PartName;
 import fringekeep.archive.record.PersonId;
 import fringekeep.archive.record.ThingId;
-import fringekeep.scan.internal.ScanProblems;
+import fringekeep.scan.internal.problem.ScanProblems;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.HashSet;

@@ -18,7 +18,7 @@ import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.KindName;
 import fringekeep.archive.record.PartName;
 import fringekeep.scan.internal.Rows;
-import fringekeep.scan.internal.ScanProblems;
+import fringekeep.scan.internal.problem.ScanProblems;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;

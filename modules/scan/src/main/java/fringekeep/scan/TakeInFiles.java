@@ -11,7 +11,7 @@ import fringekeep.archive.problem.StoppedException;
 import fringekeep.archive.problem.Work;
 import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.PersonId;
-import fringekeep.scan.internal.ScanProblems;
+import fringekeep.scan.internal.problem.ScanProblems;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;

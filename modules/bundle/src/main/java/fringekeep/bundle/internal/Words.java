@@ -1,7 +1,7 @@
 package fringekeep.bundle.internal;
 
-import fringekeep.bundle.Author;
-import fringekeep.bundle.BundleSettings;
+import fringekeep.bundle.stated.Author;
+import fringekeep.bundle.stated.BundleSettings;
 import java.util.List;
 import java.util.Optional;
 

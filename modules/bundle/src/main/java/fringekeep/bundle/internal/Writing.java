@@ -15,7 +15,7 @@ import fringekeep.archive.problem.StoppedException;
 import fringekeep.archive.problem.Work;
 import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.PayloadReference;
-import fringekeep.bundle.BundleSettings;
+import fringekeep.bundle.stated.BundleSettings;
 import fringekeep.drawing.Picture;
 import fringekeep.drawing.PictureFiles;
 import java.io.IOException;

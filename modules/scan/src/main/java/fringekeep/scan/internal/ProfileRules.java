@@ -5,6 +5,7 @@ import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
 import fringekeep.archive.quantity.Unit;
 import fringekeep.archive.quantity.Units;
+import fringekeep.scan.internal.problem.ScanProblems;
 import fringekeep.scan.internal.reading.HeaderRules;
 import fringekeep.scan.internal.reading.ProfileNames;
 import java.util.ArrayList;

@@ -5,6 +5,7 @@ import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
 import fringekeep.archive.quantity.Unit;
 import fringekeep.archive.quantity.Units;
+import fringekeep.scan.internal.problem.ScanProblems;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;

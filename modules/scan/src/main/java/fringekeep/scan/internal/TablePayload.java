@@ -6,6 +6,7 @@ import fringekeep.archive.kind.NewPayload;
 import fringekeep.archive.kind.NpyPayload;
 import fringekeep.archive.kind.RecordView;
 import fringekeep.archive.problem.ProblemException;
+import fringekeep.scan.internal.problem.ScanProblems;
 import fringekeep.scan.internal.reading.ScanTable;
 import java.util.LinkedHashMap;
 import java.util.List;

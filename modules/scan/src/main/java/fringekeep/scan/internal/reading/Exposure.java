@@ -2,7 +2,7 @@ package fringekeep.scan.internal.reading;
 
 import fringekeep.archive.json.JsonObject;
 import fringekeep.archive.problem.ProblemException;
-import fringekeep.scan.internal.ScanProblems;
+import fringekeep.scan.internal.problem.ScanProblems;
 import fringekeep.scan.internal.reading.ProfileColumn.Role;
 import java.util.Arrays;
 

@@ -1,7 +1,7 @@
 package fringekeep.scan.internal.reading;
 
 import fringekeep.archive.problem.ProblemException;
-import fringekeep.scan.internal.ScanProblems;
+import fringekeep.scan.internal.problem.ScanProblems;
 import java.util.List;
 import java.util.Optional;
 

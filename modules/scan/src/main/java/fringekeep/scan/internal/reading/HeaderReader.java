@@ -4,7 +4,7 @@ import fringekeep.archive.json.JsonObject;
 import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
 import fringekeep.archive.record.Moment;
-import fringekeep.scan.internal.ScanProblems;
+import fringekeep.scan.internal.problem.ScanProblems;
 import fringekeep.scan.internal.reading.HeaderKey.Use;
 import java.util.ArrayList;
 import java.util.List;

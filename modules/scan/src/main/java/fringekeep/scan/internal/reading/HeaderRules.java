@@ -2,7 +2,7 @@ package fringekeep.scan.internal.reading;
 
 import fringekeep.archive.json.JsonObject;
 import fringekeep.archive.problem.Problem;
-import fringekeep.scan.internal.ScanProblems;
+import fringekeep.scan.internal.problem.ScanProblems;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;

@@ -2,7 +2,7 @@ package fringekeep.scan.internal.reading;
 
 import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
-import fringekeep.scan.internal.ScanProblems;
+import fringekeep.scan.internal.problem.ScanProblems;
 import java.nio.ByteBuffer;
 import java.nio.CharBuffer;
 import java.nio.charset.Charset;

@@ -2,7 +2,7 @@ package fringekeep.scan.internal.reading;
 
 import fringekeep.archive.problem.Problem;
 import fringekeep.archive.record.Moment;
-import fringekeep.scan.internal.ScanProblems;
+import fringekeep.scan.internal.problem.ScanProblems;
 import java.time.DateTimeException;
 import java.time.Instant;
 import java.time.LocalDateTime;

@@ -1,4 +1,4 @@
-package fringekeep.bundle;
+package fringekeep.bundle.stated;
 
 import java.time.LocalDate;
 import java.util.List;

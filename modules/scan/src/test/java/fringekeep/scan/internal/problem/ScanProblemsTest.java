@@ -1,4 +1,4 @@
-package fringekeep.scan.internal;
+package fringekeep.scan.internal.problem;
 
 import static org.assertj.core.api.Assertions.assertThat;
 

@@ -1,4 +1,4 @@
-package fringekeep.bundle;
+package fringekeep.bundle.stated;
 
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;

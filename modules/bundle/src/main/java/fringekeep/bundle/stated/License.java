@@ -1,4 +1,4 @@
-package fringekeep.bundle;
+package fringekeep.bundle.stated;
 
 import java.util.Optional;
 

@@ -1,4 +1,4 @@
-package fringekeep.scan.internal;
+package fringekeep.scan.internal.problem;
 
 import fringekeep.archive.problem.Problem;
 import java.text.MessageFormat;
@@ -9,7 +9,7 @@ import java.util.ResourceBundle;
 /** Problems of this module, their texts taken from a bundle by code. */
 public final class ScanProblems {
     private static final ResourceBundle TEXTS = ResourceBundle.getBundle(
-            "fringekeep.scan.internal.problems", Locale.ROOT, ScanProblems.class.getClassLoader());
+            "fringekeep.scan.internal.problem.problems", Locale.ROOT, ScanProblems.class.getClassLoader());
 
     private ScanProblems() {}
 

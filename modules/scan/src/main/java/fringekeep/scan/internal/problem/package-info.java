@@ -1,0 +1,3 @@
+/** Problems of reading and placing scans, with their texts. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.scan.internal.problem;
