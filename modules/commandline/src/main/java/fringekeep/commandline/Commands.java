@@ -21,6 +21,7 @@ final class Commands {
                 new LineageCommands(console),
                 new RecomputeCommands(console),
                 new BundleCommands(console),
+                new ComputeCommand(console),
                 new DemoCommand(console))) {
             groups.add(new CommandLine(group));
         }
