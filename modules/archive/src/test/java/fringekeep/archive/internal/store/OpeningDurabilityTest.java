@@ -119,20 +119,26 @@ class OpeningDurabilityTest {
     }
 
     @Test
-    void networkAndSynchronisedFoldersAreNoSafePlace() throws Exception {
-        for (String type : List.of("nfs4", "cifs", "smb3", "fuse.sshfs", "9p", "NFS")) {
-            assertThat(FolderPlace.examineType(type, folder))
+    void networkFoldersAreNoSafePlace() {
+        for (String type : List.of("nfs", "nfs4", "cifs", "smb3", "fuse.sshfs", "fuse", "9p", "NFS")) {
+            assertThat(FolderPlace.examineStore(type, "share", folder))
                     .hasValueSatisfying(problem -> assertThat(problem.code()).isEqualTo("archive.network-folder"));
         }
-        for (String type : List.of("ext4", "xfs", "apfs", "ntfs", "fuseblk", "overlay", "tmpfs", "zfs")) {
-            assertThat(FolderPlace.examineType(type, folder)).isEmpty();
+        for (String source :
+                List.of("machine:/export/lab", "192.0.2.1,192.0.2.2:/lab", "//machine/lab", "\\\\machine\\lab")) {
+            assertThat(FolderPlace.examineStore("unheard-of", source, folder))
+                    .hasValueSatisfying(problem -> assertThat(problem.what()).contains(source));
         }
-        Path shared = Files.createDirectory(folder.resolve("shared"));
-        Files.createDirectory(shared.resolve(".stfolder"));
-        assertThat(problem(() -> Filled.found(shared.resolve("lab/archive"), new Script()))
-                        .code())
-                .isEqualTo("archive.sync-folder");
-        assertThat(shared.resolve("lab")).doesNotExist();
+    }
+
+    @Test
+    void disksOfThisMachineAreSafePlaces() {
+        for (String type : List.of("ext4", "xfs", "apfs", "NTFS", "fuseblk", "overlay", "tmpfs", "zfs", "exfat")) {
+            for (String source :
+                    List.of("/dev/disk1", "overlay", "pool/lab", "Data", "C:/", "/dev/disk/by-path/usb-0:1")) {
+                assertThat(FolderPlace.examineStore(type, source, folder)).isEmpty();
+            }
+        }
     }
 
     @Test

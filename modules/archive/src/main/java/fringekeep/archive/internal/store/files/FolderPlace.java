@@ -2,62 +2,27 @@ package fringekeep.archive.internal.store.files;
 
 import fringekeep.archive.problem.Problem;
 import java.io.IOException;
+import java.nio.file.FileStore;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.Set;
 
 /**
  * Whether a folder is a place where an archive is safe. On a network folder two machines can write at once and forcing to
- * disk may be a promise only; a folder that another program copies between machines changes files behind the database's
- * back.
+ * disk may be a promise only. It is known by the protocol the file system is named for, by running outside the system's
+ * kernel, by a source that names another machine ({@code machine:folder}, {@code //machine/share}), or by a path that
+ * does. Folders that another program copies between machines cannot be told from others: there is no common sign of
+ * them, so they are not looked for, and whoever chooses the folder has to keep the archive out of them.
  */
 public final class FolderPlace {
-    private static final Set<String> NETWORK = Set.of(
-            "nfs",
-            "nfs3",
-            "nfs4",
-            "cifs",
-            "smb",
-            "smb2",
-            "smb3",
-            "smbfs",
-            "smb-share",
-            "afs",
-            "afpfs",
-            "ncpfs",
-            "coda",
-            "davfs",
-            "webdav",
-            "sshfs",
-            "9p",
-            "ceph",
-            "glusterfs",
-            "lustre",
-            "gfs2",
-            "ocfs2",
-            "vboxsf",
-            "prl_fs",
-            "vmhgfs",
-            "drvfs",
-            "rclone",
-            "osxfuse",
-            "macfuse");
+    /** File systems named for the protocol that reaches them, without the number of the protocol's version. */
+    private static final Set<String> PROTOCOLS =
+            Set.of("nfs", "cifs", "smb", "smbfs", "afs", "afpfs", "9p", "dav", "davfs", "webdav", "sshfs", "ftpfs");
 
-    /** Files that programs which copy folders between machines keep at the top of such a folder. */
-    private static final List<String> SYNC_MARKERS = List.of(
-            ".stfolder",
-            ".csync_journal.db",
-            ".owncloudsync.log",
-            ".nextcloudsync.log",
-            ".dropbox.cache",
-            ".tmp.drivedownload",
-            ".849C9593-D756-4E56-8D6E-42412F2A707B",
-            ".sync.ffs_db",
-            ".seafile-data",
-            ".unison");
+    /** Running outside the kernel, but on a disk of this machine: what such a file system on a block device is called. */
+    private static final String ON_A_DISK = "fuseblk";
 
     private FolderPlace() {}
 
@@ -71,42 +36,39 @@ public final class FolderPlace {
             return Optional.empty();
         }
         Path real = existing.toRealPath();
-        Optional<Problem> network = examineType(Files.getFileStore(real).type(), folder);
-        return network.isPresent() || real.startsWith("\\\\") ? network : syncMarker(real, folder);
+        FileStore store = Files.getFileStore(real);
+        String root = real.getRoot() == null ? "" : real.getRoot().toString();
+        return examineStore(store.type(), root.startsWith("\\\\") ? root : store.name(), folder);
     }
 
-    /** What is wrong with a place on a file system of that type, if anything. */
-    public static Optional<Problem> examineType(String type, Path folder) {
-        String name = type.toLowerCase(Locale.ROOT);
-        boolean network = NETWORK.contains(name) || (name.startsWith("fuse.") && !name.equals("fuse.ntfs-3g"));
-        if (!network) {
+    /**
+     * What is wrong with a place on such a file system, if anything.
+     *
+     * @param type what the operating system calls the file system
+     * @param source what it lies on: a device, another machine's folder, or a name that says nothing
+     */
+    public static Optional<Problem> examineStore(String type, String source, Path folder) {
+        if (!byProtocol(type.toLowerCase(Locale.ROOT)) && !elsewhere(source)) {
             return Optional.empty();
         }
         return Optional.of(new Problem(
                 "archive.network-folder",
-                "The folder lies on a network or shared file system (" + type + "), where an archive is not safe.",
+                "The folder lies on a network or shared file system (" + type + ", " + source
+                        + "), where an archive is not safe.",
                 folder.toString(),
                 "Keep the archive on a disk of this machine and put plain copies on the network folder."
                         + " Nothing was changed."));
     }
 
-    private static Optional<Problem> syncMarker(Path real, Path folder) {
-        for (Path above = real; above != null; above = above.getParent()) {
-            for (String marker : SYNC_MARKERS) {
-                if (Files.exists(above.resolve(marker))) {
-                    return Optional.of(synchronised(above.resolve(marker), folder));
-                }
-            }
-        }
-        return Optional.empty();
+    private static boolean byProtocol(String type) {
+        boolean outsideTheKernel = type.startsWith("fuse") && !type.equals(ON_A_DISK);
+        return outsideTheKernel || PROTOCOLS.contains(type) || PROTOCOLS.contains(type.replaceFirst("[0-9]+$", ""));
     }
 
-    private static Problem synchronised(Path marker, Path folder) {
-        return new Problem(
-                "archive.sync-folder",
-                "The folder is copied between machines by another program (" + marker + " says so),"
-                        + " which would tear the archive apart.",
-                folder.toString(),
-                "Keep the archive outside that folder and put plain copies into it. Nothing was changed.");
+    /** {@code machine:folder} or two leading strokes; a drive letter is not a machine. */
+    private static boolean elsewhere(String source) {
+        return source.startsWith("//")
+                || source.startsWith("\\\\")
+                || (source.indexOf(":/") > 1 && !source.startsWith("/"));
     }
 }
