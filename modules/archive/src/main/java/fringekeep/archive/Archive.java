@@ -161,7 +161,7 @@ public interface Archive extends AutoCloseable {
     /** Re-hashes everything, follows the journal, compares projections, finds orphans; names each fault. */
     List<Problem> check(Work work) throws StoppedException, ProblemException;
 
-    /** Rebuilds all projections. */
+    /** Rebuilds all projections, and the words that records are found by. */
     void rebuildProjections(Work work) throws StoppedException, ProblemException;
 
     /** Copies the archive out as plain files while it is in use; a second copy into the same folder adds. */

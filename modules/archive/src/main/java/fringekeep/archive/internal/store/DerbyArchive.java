@@ -11,6 +11,7 @@ import fringekeep.archive.Prepared;
 import fringekeep.archive.Scope;
 import fringekeep.archive.graph.Graph;
 import fringekeep.archive.graph.StateName;
+import fringekeep.archive.internal.store.db.StoreFailure;
 import fringekeep.archive.internal.store.journal.Act;
 import fringekeep.archive.internal.store.journal.Entry;
 import fringekeep.archive.internal.store.projection.ProjectionQuery;
@@ -185,6 +186,18 @@ final class DerbyArchive implements Archive {
 
     @Override
     public Page list(Listing listing) throws ProblemException {
+        try {
+            return page(listing);
+        } catch (StoreFailure e) {
+            if (!e.tableGone()) {
+                throw e;
+            }
+            filling.awaitSwap();
+            return page(listing);
+        }
+    }
+
+    private Page page(Listing listing) throws ProblemException {
         State state = store.state();
         ProjectionQuery query = new ProjectionQuery(projections, listing, state.watermark());
         return store.<Page, ProblemException>read(c -> new ListingAnswer(c, state, query, listing).page());
@@ -307,8 +320,10 @@ final class DerbyArchive implements Archive {
     @Override
     public void purge(PurgeTarget target, Hash hash, String reason, String text) throws ProblemException {
         Arriving withoutIt = new Arriving(kinds, new Views(new Without(bytes, hash), kinds));
-        new Purging(store, projections).purge(target, hash, reason, text, withoutIt);
-        views.forget();
+        filling.<ProblemException>between(() -> {
+            new Purging(store, projections).purge(target, hash, reason, text, withoutIt);
+            views.forget();
+        });
     }
 
     @Override

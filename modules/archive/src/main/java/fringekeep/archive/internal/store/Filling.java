@@ -13,8 +13,8 @@ import java.util.List;
 import java.util.Map;
 
 /**
- * Fills projections: after opening those that are new or declared otherwise, on request all. Rows are gathered in a new table
- * while the old one answers; the swap is one transaction.
+ * Fills projections: after opening those that are new or declared otherwise, on request all, and the words that records are
+ * found by. Rows are gathered in a new table while the old one answers; the swap is one transaction.
  */
 final class Filling implements AutoCloseable {
     private static final System.Logger LOG = System.getLogger(Filling.class.getName());
@@ -58,9 +58,30 @@ final class Filling implements AutoCloseable {
         }
     }
 
-    /** Makes all projections anew. */
+    /** Makes all projections and words anew. */
     void rebuild(Work work) throws StoppedException, ProblemException {
         rebuild(projections.names(), work);
+        synchronized (oneAtATime) {
+            new WordFilling(store, arriving).rebuild(work);
+        }
+    }
+
+    /** Something that must not fall into a filling, such as taking away what rows and words were worked out from. */
+    @FunctionalInterface
+    interface Alone<E extends Exception> {
+        void run() throws E;
+    }
+
+    /** Does it when no filling is under way: rows worked out before would bring back what it takes away. */
+    <E extends Exception> void between(Alone<E> what) throws E {
+        synchronized (oneAtATime) {
+            what.run();
+        }
+    }
+
+    /** Returns when a swap that has begun is known to all readers; they happen on the writer thread. */
+    void awaitSwap() {
+        store.<Boolean, RuntimeException>onWriter(transactor -> true);
     }
 
     private void rebuild(List<String> names, Work work) throws StoppedException {

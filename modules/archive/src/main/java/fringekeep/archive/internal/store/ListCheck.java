@@ -1,6 +1,5 @@
 package fringekeep.archive.internal.store;
 
-import fringekeep.archive.internal.store.db.Sql;
 import fringekeep.archive.internal.store.projection.ProjectedRow;
 import fringekeep.archive.internal.store.projection.Projections;
 import fringekeep.archive.internal.store.tables.Records;
@@ -13,7 +12,6 @@ import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
-import java.util.TreeSet;
 
 /** Works out words and rows of every record anew and compares them with the tables. */
 final class ListCheck {
@@ -41,7 +39,7 @@ final class ListCheck {
                         "select count(*) from word w where w.n <= ? and not exists (select 1 from record r where r.n = w.n)",
                         at.watermark())
                 > 0) {
-            faults.damaged("word.surplus", "Words belong to no record.", "table word");
+            faults.add("word.surplus", "Words belong to no record.", "table word", REBUILD);
         }
     }
 
@@ -68,15 +66,14 @@ final class ListCheck {
         if (arriving.known(head).isEmpty()) {
             return;
         }
-        List<String> found = at.read(c -> Sql.list(
-                c,
-                "select word from word where n = ?",
-                one -> one.getString(1),
-                row.record().n()));
-        Set<String> stored = new TreeSet<>(found);
+        Set<String> stored = at.read(c -> WordFilling.stored(c, row.record().n()));
         Set<String> now = arriving.words(row.record().fingerprint(), head);
         if (!stored.equals(now)) {
-            faults.damaged("word.differs", "The words to find it by are " + stored + ", not " + now + ".", where(row));
+            faults.add(
+                    "word.differs",
+                    "The words to find it by are " + stored + ", not " + now + ".",
+                    where(row),
+                    REBUILD);
         }
     }
 

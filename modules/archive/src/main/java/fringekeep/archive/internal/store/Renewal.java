@@ -1,6 +1,5 @@
 package fringekeep.archive.internal.store;
 
-import fringekeep.archive.internal.store.db.Sql;
 import fringekeep.archive.internal.store.projection.ProjectedRow;
 import fringekeep.archive.internal.store.projection.Projections;
 import fringekeep.archive.internal.store.tables.Located;
@@ -24,10 +23,7 @@ record Renewal(Located record, Set<String> words, List<ProjectedRow> rows) {
     }
 
     void write(Connection c, Projections projections) throws SQLException {
-        Sql.run(c, "delete from word where n = ?", record.n());
-        for (String word : words) {
-            Sql.run(c, "insert into word (word, n) values (?, ?)", word, record.n());
-        }
+        WordFilling.replace(c, record.n(), words);
         projections.delete(c, record.n(), record.kind());
         projections.insert(c, record.n(), rows);
     }
