@@ -17,7 +17,7 @@ final class Killing {
 
     /** How many kills a test makes; the whole number is asked for by the build's profile "thorough". */
     static int times() {
-        return Integer.getInteger("fringekeep.kills", 8);
+        return Integer.getInteger("fringekeep.kills", 4);
     }
 
     /** Lines the program wrote before it halted. */
