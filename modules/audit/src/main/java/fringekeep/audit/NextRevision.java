@@ -31,6 +31,9 @@ import java.util.Set;
  * one. Worked out first, so that the same code answers "suppose", and recorded only on request.
  */
 public final class NextRevision {
+    /** Code of the reason of a record that has nothing left to be made from; no failure of the others. */
+    public static final String FALLS_AWAY = "audit.falls-away";
+
     private final Archive archive;
     private final Graph graph;
     private final Supposed supposed;
@@ -150,7 +153,7 @@ public final class NextRevision {
                         Optional.empty(),
                         List.of(),
                         List.of(new Problem(
-                                "audit.falls-away",
+                                FALLS_AWAY,
                                 "Nothing is left to make " + label + " from.",
                                 label,
                                 "Judge it withdrawn, or restore what it was made from.")));

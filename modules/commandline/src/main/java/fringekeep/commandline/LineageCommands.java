@@ -304,7 +304,11 @@ final class LineageCommands {
             if (!json) {
                 console.line(recorded.size() + " recorded");
             }
-            return revisions.stream().allMatch(revision -> revision.reasons().isEmpty()) ? Exit.DONE : Exit.COULD_NOT;
+            return revisions.stream()
+                            .flatMap(revision -> revision.reasons().stream())
+                            .allMatch(reason -> reason.code().equals(NextRevision.FALLS_AWAY))
+                    ? Exit.DONE
+                    : Exit.COULD_NOT;
         }
     }
 }

@@ -4,6 +4,7 @@ import fringekeep.archive.facet.Estimates;
 import fringekeep.archive.facet.Plottable;
 import fringekeep.archive.kind.Input;
 import fringekeep.archive.kind.Inputs;
+import fringekeep.archive.kind.Sensitivity;
 import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
 import fringekeep.archive.quantity.Unit;
@@ -96,7 +97,7 @@ final class Gathering {
                 "/estimate",
                 "It has: " + String.join(", ", estimates.names()) + "."));
         Unit y = unit(request.yUnit(), estimates.units().get(position), "y");
-        double variance = estimates.covariance(position, position);
+        double variance = combined(estimates, position);
         boolean known = Double.isFinite(variance) && variance > 0;
         return new Numbers(
                 request.at().isPresent() ? "points" : "level",
@@ -105,6 +106,16 @@ final class Gathering {
                 new double[] {y.fromSi(estimates.values()[position])},
                 known ? new double[] {y.differenceFromSi(Math.sqrt(variance))} : new double[0],
                 List.of(Optional.of(input.target())));
+    }
+
+    /** Statistical variance and the parts of all shared sources, in the order in which the record lists them. */
+    private static double combined(Estimates estimates, int position) {
+        double variance = estimates.covariance(position, position);
+        for (Sensitivity shared : estimates.sensitivities()) {
+            double part = shared.derivatives()[position] * shared.deviation();
+            variance += part * part;
+        }
+        return variance;
     }
 
     private Unit unit(String wanted, String offered, String axis) throws ProblemException {
