@@ -21,10 +21,6 @@ def fringe(x, n, v, p, d=266.0):
     return n * (1 + v * np.cos(2 * np.pi * x / d + p))
 
 
-def start(y):
-    return [y.mean(), 0.3, 0.0]
-
-
 def fixed(table, few):
     x = table[0]
     return [curve_fit(lambda t, n, v, p: fringe(t, n, v, p), x, y, p0=guess(x, y))[0][1] for y in table[1:1 + few]]
