@@ -154,4 +154,18 @@ class OpeningDurabilityTest {
                                 .containsExactly("/title", "/dayBoundary", "/zone"));
         assertThat(folder.resolve("archive")).doesNotExist();
     }
+
+    /** That programs which copy folders between machines leave a hidden sync entry: common practice, no source. */
+    @Test
+    void aFolderKeptTheSameOnSeveralMachinesIsRefused() throws Exception {
+        Path shared = Files.createDirectories(folder.resolve("home/shared/bench"));
+        Path home = folder.resolve("home");
+        assertThat(FolderPlace.examineNeighbours(shared, home, shared)).isEmpty();
+        Files.createDirectory(home.resolve(".sync-settings"));
+        assertThat(FolderPlace.examineNeighbours(shared, home, shared)).isEmpty();
+        Files.createFile(home.resolve("shared/.sync_0123.db"));
+
+        assertThat(FolderPlace.examineNeighbours(shared, home, shared))
+                .hasValueSatisfying(problem -> assertThat(problem.code()).isEqualTo("archive.sync-folder"));
+    }
 }
