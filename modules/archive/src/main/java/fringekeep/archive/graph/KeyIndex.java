@@ -2,7 +2,7 @@ package fringekeep.archive.graph;
 
 /**
  * Finds numbers by keys of a fixed count of longs (a hash: four, a thing: two). Open addressing over vectors, at most two
- * thirds full; keys are digests or random, so their first bits serve as hash.
+ * thirds full.
  */
 final class KeyIndex {
     static final int NONE = -1;
@@ -62,7 +62,7 @@ final class KeyIndex {
     }
 
     private int slot(long[] key) {
-        int slot = (int) (key[0] ^ (key[0] >>> 32)) & (capacity - 1);
+        int slot = mixed(key) & (capacity - 1);
         while (true) {
             int number = slots.get(slot);
             if (number == NONE || equal(number, key)) {
@@ -70,6 +70,16 @@ final class KeyIndex {
             }
             slot = (slot + 1) & (capacity - 1);
         }
+    }
+
+    /** Every bit of the key counts: ids that another archive chose badly must not fall into one row of slots. */
+    private static int mixed(long[] key) {
+        long mixed = 0;
+        for (long word : key) {
+            mixed = (mixed ^ word) * 0x9E3779B97F4A7C15L;
+            mixed ^= mixed >>> 29;
+        }
+        return (int) (mixed ^ (mixed >>> 32));
     }
 
     private boolean equal(int number, long[] key) {
