@@ -1,0 +1,74 @@
+package fringekeep.property;
+
+import fringekeep.archive.json.JsonObject;
+import fringekeep.archive.kind.Inputs;
+import fringekeep.archive.kind.Parts;
+import fringekeep.archive.kind.RecordKind;
+import fringekeep.archive.kind.RecordView;
+import fringekeep.archive.kind.Role;
+import fringekeep.archive.kind.Title;
+import fringekeep.archive.listing.Projection;
+import fringekeep.archive.listing.Row;
+import fringekeep.archive.problem.Problem;
+import fringekeep.archive.record.KindName;
+import fringekeep.archive.record.PartName;
+import java.util.List;
+import java.util.Set;
+import java.util.stream.Stream;
+
+/**
+ * A kind for tests that takes any content and stands where a fit or a judgement is asked for.
+ *
+ * @param name its name
+ */
+record EnteredKind(String name) implements RecordKind {
+    @Override
+    public KindName kind() {
+        return new KindName(name);
+    }
+
+    @Override
+    public int schema() {
+        return 1;
+    }
+
+    @Override
+    public JsonObject jsonSchema(int number) {
+        return JsonObject.EMPTY.with("type", "object");
+    }
+
+    @Override
+    public Set<PartName> sealedParts() {
+        return Set.of(PartName.WHO);
+    }
+
+    @Override
+    public List<Role> inputRoles() {
+        return List.of();
+    }
+
+    @Override
+    public List<Role> aboutRoles() {
+        return List.of();
+    }
+
+    @Override
+    public List<Problem> examine(Parts parts, Inputs inputs) {
+        return List.of();
+    }
+
+    @Override
+    public List<Projection> projections() {
+        return List.of();
+    }
+
+    @Override
+    public Stream<Row> rows(Projection projection, RecordView record, Inputs inputs) {
+        return Stream.empty();
+    }
+
+    @Override
+    public Title title(RecordView record, Inputs inputs) {
+        return new Title(name, "");
+    }
+}
