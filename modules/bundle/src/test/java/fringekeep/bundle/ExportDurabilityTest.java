@@ -3,10 +3,15 @@ package fringekeep.bundle;
 import static org.assertj.core.api.Assertions.assertThat;
 
 import fringekeep.archive.problem.Work;
+import java.io.File;
+import java.net.URI;
+import java.net.URLClassLoader;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Random;
+import java.util.stream.Collectors;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -43,7 +48,7 @@ class ExportDurabilityTest {
         Process process = new ProcessBuilder(
                         Path.of(System.getProperty("java.home"), "bin", "java").toString(),
                         "-cp",
-                        System.getProperty("java.class.path"),
+                        classPath(),
                         HaltedExport.class.getName(),
                         place.toString(),
                         Integer.toString(reports))
@@ -51,6 +56,16 @@ class ExportDurabilityTest {
                 .redirectOutput(folder.resolve("words").toFile())
                 .start();
         return process.waitFor();
+    }
+
+    /** The class path of the tests, however they were started. */
+    private static String classPath() {
+        if (ExportDurabilityTest.class.getClassLoader() instanceof URLClassLoader loader) {
+            return Arrays.stream(loader.getURLs())
+                    .map(url -> Path.of(URI.create(url.toString())).toString())
+                    .collect(Collectors.joining(File.pathSeparator));
+        }
+        return System.getProperty("java.class.path");
     }
 
     private static List<Path> finalNames(Path out) throws Exception {
