@@ -17,7 +17,17 @@ final class VirtualDisplay implements AutoCloseable {
 
     static VirtualDisplay start(int width, int height) throws IOException {
         Process server = new ProcessBuilder(
-                        "Xvfb", "-displayfd", "1", "-screen", "0", width + "x" + height + "x24", "-nolisten", "tcp")
+                        // a key that is held while the window thread works must not repeat: it would switch the theme
+                        // back
+                        "Xvfb",
+                        "-r",
+                        "-displayfd",
+                        "1",
+                        "-screen",
+                        "0",
+                        width + "x" + height + "x24",
+                        "-nolisten",
+                        "tcp")
                 .redirectError(ProcessBuilder.Redirect.DISCARD)
                 .start();
         BufferedReader reader = server.inputReader(StandardCharsets.US_ASCII);
