@@ -6,8 +6,8 @@ import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import fringekeep.archive.json.CanonicalJson;
 import fringekeep.archive.json.Json;
 import fringekeep.archive.json.JsonArray;
-import fringekeep.archive.json.JsonLayout;
 import fringekeep.archive.json.JsonObject;
+import fringekeep.archive.json.PrettyJson;
 import fringekeep.archive.kind.Kinds;
 import fringekeep.archive.kind.Role;
 import fringekeep.archive.making.DemoKind;
@@ -183,7 +183,7 @@ class EntryDocumentTest {
 
         assertThat(document.object("content").orElseThrow().text("length")).contains("10.50 ± 0.05 mm");
         assertThat(document.text("corrects")).contains("batch 1");
-        Entered entered = read(JsonLayout.write(document));
+        Entered entered = read(new String(PrettyJson.write(document), StandardCharsets.UTF_8));
         assertThat(entered.record().parts().get(PartName.CONTENT)).isEqualTo(content);
     }
 
