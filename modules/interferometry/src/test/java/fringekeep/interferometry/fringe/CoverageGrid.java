@@ -1,6 +1,8 @@
 package fringekeep.interferometry.fringe;
 
 import fringekeep.interferometry.statistics.AmplitudeLimits;
+import fringekeep.interferometry.statistics.Estimate;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Random;
 
@@ -28,6 +30,8 @@ final class CoverageGrid {
             int failed,
             double visibilityOne,
             double visibilityTwo,
+            double waldOne,
+            double waldTwo,
             double phaseOne,
             double phaseTwo,
             double below5,
@@ -44,7 +48,7 @@ final class CoverageGrid {
                 .background(background > 0 ? Background.known(background, 0) : Background.NONE)
                 .driftOrder(cell.drift() == 0 ? 0 : 1);
         int failed = 0;
-        double[] sums = new double[10];
+        double[] sums = new double[12];
         for (int k = 0; k < scans; k++) {
             double phase = 2 * Math.PI * random.nextDouble() - Math.PI;
             FringeData data = SimulatedScans.scan(
@@ -59,14 +63,18 @@ final class CoverageGrid {
             sums[1] += profile.acceptsVisibility(cell.visibility(), TWO_SIGMA) ? 1 : 0;
             sums[2] += cell.phaseMeaningful() && profile.acceptsPhase(phase, ONE_SIGMA) ? 1 : 0;
             sums[3] += cell.phaseMeaningful() && profile.acceptsPhase(phase, TWO_SIGMA) ? 1 : 0;
+            Estimate seen = fit.visibility().orElseThrow();
+            double off = Math.abs(seen.value() - cell.visibility()) / seen.standardUncertainty();
+            sums[10] += off <= 1 ? 1 : 0;
+            sums[11] += off <= 2 ? 1 : 0;
             double p = fit.goodness().pValue();
             sums[4] += p < 0.05 ? 1 : 0;
             sums[5] += p < 1 - ONE_SIGMA ? 1 : 0;
             sums[6] += p < 0.5 ? 1 : 0;
             sums[7] += fit.mean().value() - mean;
             sums[9] += fit.mean().standardUncertainty();
-            double corrected = AmplitudeLimits.biasCorrected(
-                    fit.visibility().orElseThrow().value(), fit.harmonic().quadratureNoise());
+            double corrected =
+                    AmplitudeLimits.biasCorrected(seen.value(), fit.harmonic().quadratureNoise());
             sums[8] += (corrected - cell.visibility()) / cell.noise();
         }
         double n = scans - failed;
@@ -75,6 +83,8 @@ final class CoverageGrid {
                 failed,
                 sums[0] / n,
                 sums[1] / n,
+                sums[10] / n,
+                sums[11] / n,
                 sums[2] / n,
                 sums[3] / n,
                 sums[4] / n,
@@ -85,10 +95,10 @@ final class CoverageGrid {
     }
 
     static List<Cell> whole() {
-        List<Cell> cells = new java.util.ArrayList<>();
-        double[][] surroundings = {{0, 0}, {0.5, 0}, {0, 0.3}};
-        for (double counts : new double[] {50, 200, 1000, 10_000, 1_000_000}) {
-            for (double visibility : new double[] {0, 0.1, 0.3, 0.6, 0.9}) {
+        List<Cell> cells = new ArrayList<>();
+        double[][] surroundings = {{0, 0}, {0.5, 0}, {0, 0.3}, {0.5, 0.3}};
+        for (double counts : new double[] {50, 100, 200, 1000, 10_000, 1_000_000}) {
+            for (double visibility : new double[] {0, 0.1, 0.3, 0.6, 0.75, 0.9}) {
                 for (int points : new int[] {8, 24, 200}) {
                     for (double[] surrounding : surroundings) {
                         cells.add(new Cell(counts, visibility, points, surrounding[0], surrounding[1]));
