@@ -1,3 +1,3 @@
-/** Test-only helpers shared by all modules: readers of reference data, a process killer. */
+/** Test-only helpers shared by all modules: programs of their own that are killed. */
 @org.jspecify.annotations.NullMarked
 package fringekeep.testsupport;

@@ -11,6 +11,7 @@ import fringekeep.archive.internal.store.db.Migration;
 import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.Work;
 import fringekeep.archive.record.Hash;
+import fringekeep.testsupport.OtherProgram;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -38,7 +39,8 @@ class KillDurabilityTest {
     }
 
     private List<String> kill(String what, int round) throws Exception {
-        List<String> lines = Killing.run(what, place, round);
+        List<String> lines =
+                OtherProgram.runUntilHalted(KilledProgram.class, what, place.toString(), Integer.toString(round));
         lines.stream()
                 .filter(line -> line.matches("done [0-9a-f]{64}"))
                 .map(line -> new Hash(line.substring(5)))
@@ -61,7 +63,7 @@ class KillDurabilityTest {
 
     @Test
     void whatWasAcknowledgedWhileTakingInAndRecordingIsThere() throws Exception {
-        for (int round = 0; round < Killing.times(); round++) {
+        for (int round = 0; round < OtherProgram.kills(); round++) {
             kill("record", round);
             verify(Migration.all(), round);
         }
@@ -70,7 +72,7 @@ class KillDurabilityTest {
 
     @Test
     void aMigrationIsAppliedWholeOrNotAtAll() throws Exception {
-        for (int round = 0; round < Killing.times(); round++) {
+        for (int round = 0; round < OtherProgram.kills(); round++) {
             kill("migrate", round);
             verify(KilledProgram.steps(round), round);
         }
@@ -78,7 +80,7 @@ class KillDurabilityTest {
 
     @Test
     void rebuildingListsCanStopAnywhere() throws Exception {
-        for (int round = 0; round < Killing.times(); round++) {
+        for (int round = 0; round < OtherProgram.kills(); round++) {
             kill("rebuild", round);
             verify(Migration.all(), round);
         }
@@ -88,7 +90,7 @@ class KillDurabilityTest {
     void aCopyHoldsWhatItPromises() throws Exception {
         CopyFolder copy = new CopyFolder(folder.resolve("copy"));
         long promised = 0;
-        for (int round = 0; round < Killing.times(); round++) {
+        for (int round = 0; round < OtherProgram.kills(); round++) {
             List<String> lines = kill("copy", round);
             promised = Math.max(
                     promised,

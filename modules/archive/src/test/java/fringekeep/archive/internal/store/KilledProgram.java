@@ -8,14 +8,13 @@ import fringekeep.archive.kind.Kinds;
 import fringekeep.archive.problem.Work;
 import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.InputReference;
+import fringekeep.testsupport.OtherProgram;
 import java.io.PrintStream;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Random;
-import java.util.Timer;
-import java.util.TimerTask;
 
 /** A program of its own that works on an archive until it halts at a random moment, as in a power cut of the program. */
 final class KilledProgram {
@@ -34,40 +33,33 @@ final class KilledProgram {
     /** Arguments: what to do, the archive's folder, the round. */
     public static void main(String[] arguments) throws Exception {
         KilledProgram program = new KilledProgram(Path.of(arguments[1]), Long.parseLong(arguments[2]));
-        Timer timer = new Timer(true);
         boolean whileOpening = program.round % 4 == 3;
         if (whileOpening) {
-            program.haltSoon(timer);
+            program.haltSoon();
         }
         switch (arguments[0]) {
-            case "record" -> program.record(timer);
-            case "rebuild" -> program.rebuild(timer);
-            case "migrate" -> program.migrate(timer);
-            case "copy" -> program.copy(timer);
+            case "record" -> program.record();
+            case "rebuild" -> program.rebuild();
+            case "migrate" -> program.migrate();
+            case "copy" -> program.copy();
             default -> throw new IllegalArgumentException(arguments[0]);
         }
     }
 
-    private void haltSoon(Timer timer) {
-        TimerTask halt = new TimerTask() {
-            @Override
-            public void run() {
-                Runtime.getRuntime().halt(0);
-            }
-        };
-        timer.schedule(halt, random.nextInt(500));
+    private void haltSoon() {
+        OtherProgram.haltWithin(random, 500);
     }
 
     private Archive open(Kinds kinds, List<Migration> migrations) throws Exception {
         return new Opening(folder, kinds, Circumstances.real("1.0.0"), migrations).open();
     }
 
-    private void record(Timer timer) throws Exception {
+    private void record() throws Exception {
         Archive archive = open(OpenKind.all(), Migration.all());
         // on a slow machine a halt counted from here may come before anything was acknowledged, and then proves little
         boolean afterTheFirst = round % 2 == 0;
         if (!afterTheFirst) {
-            haltSoon(timer);
+            haltSoon();
         }
         for (int i = 0; ; i++) {
             byte[] raw = ("round " + round + " file " + i).getBytes(StandardCharsets.UTF_8);
@@ -82,7 +74,7 @@ final class KilledProgram {
             prepared.add(archive.prepare(Filled.labelled("placement", "signal", Filled.thing("scan", scan)), prepared));
             archive.record(prepared).forEach(recorded -> out.println("done " + recorded.fingerprint()));
             if (i == 0 && afterTheFirst) {
-                haltSoon(timer);
+                haltSoon();
             }
         }
     }
@@ -93,9 +85,9 @@ final class KilledProgram {
         return ("position_m,counts\n" + row.repeat(i % 4 == 3 ? 20_000 : 1)).getBytes(StandardCharsets.UTF_8);
     }
 
-    private void rebuild(Timer timer) throws Exception {
+    private void rebuild() throws Exception {
         Archive archive = open(round % 2 == 0 ? OpenKind.later() : OpenKind.all(), Migration.all());
-        haltSoon(timer);
+        haltSoon();
         for (int i = 0; ; i++) {
             out.println("done "
                     + archive.record(Filled.labelled("note", "round " + round + " note " + i))
@@ -104,8 +96,8 @@ final class KilledProgram {
         }
     }
 
-    private void migrate(Timer timer) throws Exception {
-        haltSoon(timer);
+    private void migrate() throws Exception {
+        haltSoon();
         Archive archive = open(OpenKind.all(), steps(round));
         for (int i = 0; ; i++) {
             out.println("done "
@@ -129,9 +121,9 @@ final class KilledProgram {
         return steps;
     }
 
-    private void copy(Timer timer) throws Exception {
+    private void copy() throws Exception {
         Archive archive = open(OpenKind.all(), Migration.all());
-        haltSoon(timer);
+        haltSoon();
         for (int i = 0; ; i++) {
             archive.takeIn(("copied " + round + " " + i).getBytes(StandardCharsets.UTF_8));
             out.println("done "

@@ -9,6 +9,7 @@ import fringekeep.archive.internal.store.db.Migration;
 import fringekeep.archive.internal.store.files.FolderPlace;
 import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
+import fringekeep.testsupport.OtherProgram;
 import java.io.BufferedReader;
 import java.io.InputStreamReader;
 import java.nio.charset.StandardCharsets;
@@ -42,7 +43,7 @@ class OpeningDurabilityTest {
     void aSecondProgramIsRefusedAndToldWhoHoldsIt() throws Exception {
         Path place = folder.resolve("archive");
         Filled.golden(place).close();
-        Process other = Killing.start(HoldingProgram.class, place.toString());
+        Process other = OtherProgram.start(HoldingProgram.class, place.toString());
         try (BufferedReader lines =
                 new BufferedReader(new InputStreamReader(other.getInputStream(), StandardCharsets.UTF_8))) {
             assertThat(lines.readLine()).isEqualTo("open 11");
