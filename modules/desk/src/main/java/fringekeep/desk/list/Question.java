@@ -3,6 +3,7 @@ package fringekeep.desk.list;
 import fringekeep.archive.graph.StateName;
 import fringekeep.archive.record.Hash;
 import java.util.Optional;
+import java.util.Set;
 
 /**
  * What a list shows.
@@ -11,9 +12,29 @@ import java.util.Optional;
  * @param state only those in this state
  * @param linkedWith only those linked with this record
  * @param words only those found by these words; empty = all
+ * @param among only these records
  * @param most rows at most
  */
-public record Question(String kind, Optional<StateName> state, Optional<Hash> linkedWith, String words, int most) {
+public record Question(
+        String kind,
+        Optional<StateName> state,
+        Optional<Hash> linkedWith,
+        String words,
+        Optional<Among> among,
+        int most) {
+    /** Records picked by something else than the list, and in which words: {@code taken in now}. */
+    public record Among(Set<Hash> records, String words) {
+        /** Copies. */
+        public Among {
+            records = Set.copyOf(records);
+        }
+    }
+
+    /** Without picked records. */
+    public Question(String kind, Optional<StateName> state, Optional<Hash> linkedWith, String words, int most) {
+        this(kind, state, linkedWith, words, Optional.empty(), most);
+    }
+
     /** All records of a kind. */
     public static Question all(String kind) {
         return new Question(kind, Optional.empty(), Optional.empty(), "", 500);
@@ -21,6 +42,6 @@ public record Question(String kind, Optional<StateName> state, Optional<Hash> li
 
     /** The same with more rows. */
     public Question more() {
-        return new Question(kind, state, linkedWith, words, most * 4);
+        return new Question(kind, state, linkedWith, words, among, most * 4);
     }
 }

@@ -92,7 +92,8 @@ public final class ReadList {
         String kind = question.kind();
         boolean all = question.state().isEmpty()
                 && question.linkedWith().isEmpty()
-                && question.words().isEmpty();
+                && question.words().isEmpty()
+                && question.among().isEmpty();
         words.add(new Word(TEXTS.of("all"), -1, Question.all(kind), all));
         for (StateName state : List.of(
                 StateName.OUTDATED, StateName.WITHDRAWN, StateName.MASKED, StateName.DOUBTED, StateName.PREFERRED)) {
@@ -106,6 +107,9 @@ public final class ReadList {
         question.linkedWith()
                 .ifPresent(
                         record -> words.add(new Word(TEXTS.of("linked", archive.label(record)), -1, question, true)));
+        question.among()
+                .ifPresent(among ->
+                        words.add(new Word(among.words(), among.records().size(), question, true)));
         if (!question.words().isEmpty()) {
             words.add(new Word(TEXTS.of("found", question.words()), -1, question, true));
         }
@@ -159,7 +163,10 @@ public final class ReadList {
                         || register.graph()
                                 .states(line.record())
                                 .contains(question.state().get());
-                if (inState && (linked.isEmpty() || linked.get().contains(line.record()))) {
+                boolean picked = question.among()
+                        .map(among -> among.records().contains(line.record()))
+                        .orElse(true);
+                if (inState && picked && (linked.isEmpty() || linked.get().contains(line.record()))) {
                     lines.add(line);
                 }
             }

@@ -9,6 +9,8 @@ import fringekeep.desk.look.Texts;
 import java.awt.BorderLayout;
 import java.awt.Rectangle;
 import java.awt.event.ActionEvent;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Optional;
 import java.util.OptionalInt;
 import java.util.function.Consumer;
@@ -129,6 +131,17 @@ public final class RecordList extends JPanel {
                 return;
             }
         }
+    }
+
+    /** All selected records in the list's order; the one in hand among them. */
+    public List<Hash> marked() {
+        List<Hash> marked = new ArrayList<>();
+        for (int row : table.getSelectedRows()) {
+            if (row < content.rows().size() && content.rows().get(row) instanceof Entry entry) {
+                marked.add(entry.record());
+            }
+        }
+        return marked;
     }
 
     /** The record in hand. */

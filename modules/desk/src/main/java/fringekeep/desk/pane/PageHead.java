@@ -19,12 +19,11 @@ import java.util.Optional;
 /** Title, fingerprint, sentence of identity, sentences of state, and what can be done as underlined words at the right. */
 @SuppressWarnings("serial")
 final class PageHead extends Painted {
-    private final transient List<PageAction> actions;
+    private transient List<PageAction> actions = List.of();
     private final transient List<Rectangle> places = new ArrayList<>();
     private transient Optional<RecordPage> page = Optional.empty();
 
-    PageHead(List<PageAction> actions) {
-        this.actions = List.copyOf(actions);
+    PageHead() {
         MouseAdapter mouse = new MouseAdapter() {
             @Override
             public void mousePressed(MouseEvent event) {
@@ -50,8 +49,9 @@ final class PageHead extends Painted {
         return Optional.empty();
     }
 
-    void show(RecordPage next) {
+    void show(RecordPage next, List<PageAction> what) {
         page = Optional.of(next);
+        actions = List.copyOf(what);
         getAccessibleContext().setAccessibleName(next.label());
         StringBuilder words = new StringBuilder(next.identity());
         next.states().forEach(state -> words.append("; ").append(state.text()));

@@ -13,6 +13,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Consumer;
+import java.util.function.Supplier;
 import javax.swing.BorderFactory;
 import javax.swing.JComponent;
 import javax.swing.JScrollPane;
@@ -24,7 +25,8 @@ public final class RecordPane extends Painted {
     private static final Texts TEXTS = new Texts("fringekeep.desk.pane.Texts", RecordPane.class);
     private static final int FOOT = 60;
 
-    private final PageHead head;
+    private final PageHead head = new PageHead();
+    private final transient Supplier<List<PageAction>> actions;
     private final PageBody body = new PageBody();
     private final JScrollPane scroll = new JScrollPane(body);
     private final LineageLine line;
@@ -34,12 +36,12 @@ public final class RecordPane extends Painted {
     /**
      * A pane.
      *
-     * @param actions what can be done with the record
+     * @param actions what can be done with the record in hand, asked each time one is shown
      * @param go told when a knot of the lineage line is followed
      * @param save told when a drawing is to be saved
      */
-    public RecordPane(List<PageAction> actions, Consumer<List<Hash>> go, Consumer<Picture> save) {
-        this.head = new PageHead(actions);
+    public RecordPane(Supplier<List<PageAction>> actions, Consumer<List<Hash>> go, Consumer<Picture> save) {
+        this.actions = actions;
         this.line = new LineageLine(go);
         this.save = save;
         setOpaque(true);
@@ -71,7 +73,7 @@ public final class RecordPane extends Painted {
     }
 
     private void fill(RecordPage next, boolean same) {
-        head.show(next);
+        head.show(next, actions.get());
         line.show(next.knots());
         List<PictureView> views = new ArrayList<>();
         for (Picture picture : next.pictures()) {

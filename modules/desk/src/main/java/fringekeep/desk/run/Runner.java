@@ -76,6 +76,14 @@ public final class Runner {
         return latest.isEmpty();
     }
 
+    /** Stops what runs for a place. */
+    public void stop(String place) {
+        Ticket ticket = latest.get(place);
+        if (ticket != null) {
+            ticket.stopped = true;
+        }
+    }
+
     /** Stops all that runs. */
     public void stop() {
         latest.values().forEach(ticket -> ticket.stopped = true);

@@ -2,6 +2,7 @@ package fringekeep.desk.window;
 
 import fringekeep.archive.Archive;
 import fringekeep.archive.graph.StateName;
+import fringekeep.archive.problem.Problem;
 import fringekeep.archive.record.Hash;
 import fringekeep.desk.chain.ChainListener;
 import fringekeep.desk.chain.ChainState;
@@ -19,13 +20,20 @@ import fringekeep.desk.look.Texts;
 import fringekeep.desk.pane.PageAction;
 import fringekeep.desk.pane.ReadRecord;
 import fringekeep.desk.pane.RecordPane;
+import fringekeep.desk.part.ProgressLine;
+import fringekeep.desk.part.TroubleLine;
 import fringekeep.desk.run.Progress;
 import fringekeep.desk.run.Runner;
 import fringekeep.desk.session.Register;
 import fringekeep.desk.session.Stops;
+import fringekeep.desk.stage.DeskAction;
+import fringekeep.desk.stage.DeskHand;
+import fringekeep.desk.stage.DeskSelection;
+import fringekeep.desk.stage.DeskSheet;
 import fringekeep.drawing.NumberText;
 import java.awt.BorderLayout;
 import java.awt.CardLayout;
+import java.nio.file.Path;
 import java.util.ArrayDeque;
 import java.util.ArrayList;
 import java.util.Deque;
@@ -51,30 +59,39 @@ public final class Desk extends JPanel {
     private final RuledSheet lineage;
     private final FirstSheet first;
     private final KeysSheet keysSheet = new KeysSheet();
-    private final CautionLine caution = new CautionLine();
+    private final TroubleLine caution = new TroubleLine();
     private final ProgressLine progress = new ProgressLine();
     private final StatusBar status = new StatusBar();
     private final CardLayout cards = new CardLayout();
     private final JPanel sheets = new JPanel(cards);
     private final JPanel top = new JPanel(new BorderLayout());
+    private final JPanel stageRoom = new JPanel(new BorderLayout());
+    private final transient DeskStages stages;
+    private final transient DeskPersons persons;
+    private final transient Hand hand;
     private final transient Deque<Place> history = new ArrayDeque<>();
     private transient Optional<Archive> archive = Optional.empty();
     private transient Optional<Register> register = Optional.empty();
+    private transient Optional<DeskSheet> sheet = Optional.empty();
     private transient Place place;
+    private String doneWords = "";
+    private int paneInSheet = 1;
     private String card = "first";
     private String cardBeforeKeys = "first";
 
     /** A desk without an archive. */
-    Desk(Runner runner, Stops stops, DeskHost host, Memory memory) {
+    Desk(Runner runner, Stops stops, DeskHost host, Memory memory, DeskStages stages) {
         super(new BorderLayout());
         this.runner = runner;
         this.stops = stops;
         this.memory = memory;
+        this.stages = stages;
+        this.hand = new Hand(this, runner, host, memory);
+        this.persons = new DeskPersons(runner, memory, host, this::showStatus);
         this.place = start(stops);
         this.strip = new ChainStrip(ChainState.empty(stops), new StripEar());
         this.list = new RecordList(this::select, this::enterRecord, this::ask);
-        this.record =
-                new RecordPane(List.of(new PageAction(TEXTS.of("trace"), 'T', this::trace)), this::follow, host::save);
+        this.record = new RecordPane(this::pageActions, this::follow, host::save);
         this.panes = new TwoPanes(list, record, width -> memory.put("list width", Integer.toString(width)));
         this.lineage =
                 new RuledSheet(strip::columns, ReadList.plurals(stops), this::selectInSheet, this::open, this::back);
@@ -113,6 +130,9 @@ public final class Desk extends JPanel {
         sheets.add(panes, "records");
         sheets.add(lineage, "lineage");
         sheets.add(keysSheet, "keys");
+        sheets.add(stageRoom, "stage");
+        stageRoom.setOpaque(false);
+        keysSheet.add(stages.keys());
         add(top, BorderLayout.NORTH);
         add(sheets, BorderLayout.CENTER);
         add(foot, BorderLayout.SOUTH);
@@ -143,6 +163,7 @@ public final class Desk extends JPanel {
                         ? TEXTS.of("view.invented")
                         : next.facts().zone());
         showCard("records");
+        persons.open(archive);
         refresh();
     }
 
@@ -150,7 +171,9 @@ public final class Desk extends JPanel {
     void closeArchive() {
         runner.stop();
         archive.ifPresent(open -> runner.run("close", work -> close(open), done -> {}));
+        leaveSheet();
         archive = Optional.empty();
+        persons.open(archive);
         register = Optional.empty();
         history.clear();
         place = start(stops);
@@ -197,6 +220,7 @@ public final class Desk extends JPanel {
         }
         ask(place.question());
         place.inHand().ifPresent(this::read);
+        sheet.ifPresent(DeskSheet::recorded);
         showStatus();
     }
 
@@ -333,6 +357,103 @@ public final class Desk extends JPanel {
         archive.ifPresent(open -> runner.run("raw", work -> RawCounts.read(open, next), lineage::showRaw));
     }
 
+    private List<PageAction> pageActions() {
+        List<PageAction> words = new ArrayList<>();
+        for (DeskAction action : stages.onRecord(selection())) {
+            words.add(new PageAction(action.word(), action.mnemonic(), () -> doIt(action)));
+        }
+        words.add(new PageAction(TEXTS.of("trace"), 'T', this::trace));
+        return words;
+    }
+
+    /** Does something with what is selected, if it applies. */
+    void doIt(DeskAction action) {
+        if (action.applies().test(selection()) && (register.isPresent() || archive.isEmpty())) {
+            action.work().accept(hand);
+        }
+    }
+
+    /** What is selected. */
+    DeskSelection selection() {
+        Optional<Hash> inHand = place.inHand();
+        List<Hash> records = card.equals("records") ? list.marked() : List.of();
+        List<Hash> all = records.isEmpty() ? inHand.stream().toList() : records;
+        Optional<String> kind = all.stream().findFirst().flatMap(one -> register.flatMap(known -> known.kind(one)));
+        return new DeskSelection(archive.isPresent(), kind, all, inHand);
+    }
+
+    /** What stages add. */
+    DeskStages stages() {
+        return stages;
+    }
+
+    /** Who is at the desk. */
+    DeskPersons persons() {
+        return persons;
+    }
+
+    /** Which records there are, once read. */
+    Optional<Register> register() {
+        return register;
+    }
+
+    /** The desk as stages see it. */
+    public DeskHand hand() {
+        return hand;
+    }
+
+    /** Shows a sheet of a stage. */
+    void show(DeskSheet next) {
+        if (sheet.isEmpty()) {
+            remember();
+        }
+        leaveSheet();
+        stageRoom.removeAll();
+        stageRoom.add(next.component(), BorderLayout.CENTER);
+        sheet = Optional.of(next);
+        showCard("stage");
+        stageRoom.revalidate();
+        next.focusFirst();
+    }
+
+    private void leaveSheet() {
+        Optional<DeskSheet> before = sheet;
+        sheet = Optional.empty();
+        before.ifPresent(DeskSheet::left);
+    }
+
+    /** Shows a list. */
+    void openList(Question question) {
+        remember();
+        place = new Place(
+                stops.of(question.kind()).orElse(place.stop()),
+                question,
+                Optional.empty(),
+                Place.Sheet.RECORDS,
+                Optional.empty());
+        showCard("records");
+        ask(question);
+        list.focusRows();
+    }
+
+    /** Says what could not be done. */
+    void say(List<Problem> problems) {
+        caution.show(problems);
+    }
+
+    /** Says what was done. */
+    void done(String words) {
+        doneWords = words;
+        showStatus();
+    }
+
+    /** Files were dropped on the window. */
+    boolean dropped(List<Path> files) {
+        return archive.isPresent()
+                && register.isPresent()
+                && stages.all().stream().anyMatch(stage -> stage.dropped(files, hand));
+    }
+
     private void remember() {
         history.push(place);
         while (history.size() > 100) {
@@ -383,10 +504,20 @@ public final class Desk extends JPanel {
     void focusRows() {
         if (card.equals("keys")) {
             showCard(cardBeforeKeys);
+            if (card.equals("stage")) {
+                sheet.ifPresent(DeskSheet::focusFirst);
+                return;
+            }
         }
         switch (card) {
             case "lineage" -> lineage.focusRows();
             case "records" -> list.focusRows();
+            case "stage" ->
+                sheet.ifPresent(one -> {
+                    if (!one.escape()) {
+                        back();
+                    }
+                });
             default -> first.focusFirst();
         }
     }
@@ -401,11 +532,23 @@ public final class Desk extends JPanel {
     void nextPane(int by) {
         java.awt.Component focus =
                 java.awt.KeyboardFocusManager.getCurrentKeyboardFocusManager().getFocusOwner();
+        if (sheet.isPresent() && card.equals("stage")) {
+            nextInSheet(sheet.get(), by, isIn(focus, strip));
+            return;
+        }
         List<Runnable> panesInOrder = card.equals("lineage")
                 ? List.of(strip::focusOpen, lineage::focusRows)
                 : List.of(strip::focusOpen, list::focusRows, record::focusPage);
         int now = isIn(focus, strip) ? 0 : isIn(focus, record) ? 2 : 1;
         panesInOrder.get(Math.floorMod(now + by, panesInOrder.size())).run();
+    }
+
+    private void nextInSheet(DeskSheet shown, int by, boolean inStrip) {
+        List<Runnable> order = new ArrayList<>();
+        order.add(strip::focusOpen);
+        order.addAll(shown.panes());
+        paneInSheet = inStrip ? Math.floorMod(by, order.size()) : Math.floorMod(paneInSheet + by, order.size());
+        order.get(paneInSheet).run();
     }
 
     private static boolean isIn(java.awt.Component focus, java.awt.Container parent) {
@@ -424,6 +567,12 @@ public final class Desk extends JPanel {
     }
 
     private void showCard(String next) {
+        if (!next.equals("stage") && !next.equals("keys")) {
+            leaveSheet();
+        }
+        if (!next.equals(card)) {
+            doneWords = "";
+        }
         card = next;
         cards.show(sheets, next);
         showStatus();
@@ -443,9 +592,17 @@ public final class Desk extends JPanel {
         archive.ifPresentOrElse(
                 open -> {
                     left.add(open.facts().title());
-                    left.add(TEXTS.of(card.equals("lineage") ? "status.lineage" : "status.list"));
+                    if (!doneWords.isEmpty()) {
+                        left.add(doneWords);
+                    }
+                    sheet.filter(one -> card.equals("stage"))
+                            .ifPresentOrElse(
+                                    one -> left.addAll(one.hints()),
+                                    () -> left.add(
+                                            TEXTS.of(card.equals("lineage") ? "status.lineage" : "status.list")));
                     right.add(TEXTS.of(
                             "status.journal", NumberText.count(open.facts().watermark())));
+                    persons.name().ifPresent(right::add);
                 },
                 () -> left.add(TEXTS.of("status.none")));
         right.add(TEXTS.of("status.keys"));
@@ -454,9 +611,9 @@ public final class Desk extends JPanel {
 
     // ---- for tests
 
-    /** What stands below the strip: first, records, lineage or keys. */
+    /** What stands below the strip: first, records, lineage, keys, or the name of a stage's sheet. */
     public String sheetShown() {
-        return card;
+        return card.equals("stage") ? sheet.map(DeskSheet::name).orElse(card) : card;
     }
 
     /** The open stop, from 0. */

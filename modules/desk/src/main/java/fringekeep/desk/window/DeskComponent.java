@@ -5,6 +5,7 @@ import java.awt.datatransfer.DataFlavor;
 import java.awt.datatransfer.UnsupportedFlavorException;
 import java.io.File;
 import java.io.IOException;
+import java.nio.file.Path;
 import java.util.List;
 import javax.swing.TransferHandler;
 import org.openide.windows.TopComponent;
@@ -49,11 +50,14 @@ public final class DeskComponent extends TopComponent {
         public boolean importData(TransferSupport support) {
             try {
                 Object files = support.getTransferable().getTransferData(DataFlavor.javaFileListFlavor);
-                if (files instanceof List<?> list && list.size() == 1 && list.get(0) instanceof File folder) {
-                    Program.only().openArchive(folder.toPath());
-                    return true;
-                }
-                return false;
+                List<Path> paths = files instanceof List<?> list
+                        ? list.stream()
+                                .filter(File.class::isInstance)
+                                .map(File.class::cast)
+                                .map(File::toPath)
+                                .toList()
+                        : List.of();
+                return !paths.isEmpty() && Program.only().dropped(paths);
             } catch (UnsupportedFlavorException | IOException e) {
                 throw new IllegalStateException("the dropped files cannot be read", e);
             }

@@ -28,6 +28,11 @@ final class DeskKeys {
         key("shift F6", () -> desk.nextPane(-1));
         key("F1", desk::keys);
         key("ESCAPE", desk::focusRows);
+        for (String stroke : desk.stages().strokes()) {
+            Runnable work =
+                    () -> desk.stages().forStroke(stroke, desk.selection()).ifPresent(desk::doIt);
+            key(stroke, stroke.length() == 1 ? outsideText(work) : work);
+        }
         key("T", outsideText(desk::trace));
         key("BACK_SPACE", outsideText(desk::back));
     }

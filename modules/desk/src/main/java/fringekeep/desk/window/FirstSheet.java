@@ -5,6 +5,7 @@ import fringekeep.desk.look.Painted;
 import fringekeep.desk.look.Pen;
 import fringekeep.desk.look.Texts;
 import fringekeep.desk.look.Type;
+import fringekeep.desk.part.WordButton;
 import java.awt.Graphics;
 
 /** What stands in the window while no archive is open: what the program is for, and the ways in. */

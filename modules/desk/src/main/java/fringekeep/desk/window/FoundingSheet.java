@@ -3,6 +3,7 @@ package fringekeep.desk.window;
 import fringekeep.desk.look.Ink;
 import fringekeep.desk.look.Texts;
 import fringekeep.desk.look.Type;
+import fringekeep.desk.part.WordButton;
 import java.awt.Dialog;
 import java.awt.GridBagConstraints;
 import java.awt.GridBagLayout;

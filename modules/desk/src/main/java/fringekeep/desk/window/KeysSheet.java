@@ -5,6 +5,7 @@ import fringekeep.desk.look.Painted;
 import fringekeep.desk.look.Pen;
 import fringekeep.desk.look.Texts;
 import fringekeep.desk.look.Type;
+import fringekeep.desk.stage.KeyLine;
 import java.awt.Graphics;
 import java.util.ArrayList;
 import java.util.List;
@@ -18,10 +19,19 @@ final class KeysSheet extends Painted {
 
     KeysSheet() {
         setFocusable(true);
-        StringBuilder words = new StringBuilder();
         for (int i = 1; !TEXTS.orElse("keys." + i, "").isEmpty(); i++) {
-            String[] row = TEXTS.of("keys." + i).split("\\|", 2);
-            rows.add(row);
+            rows.add(TEXTS.of("keys." + i).split("\\|", 2));
+        }
+        add(List.of());
+    }
+
+    /** Adds the keys of stages. */
+    void add(List<KeyLine> lines) {
+        for (KeyLine line : lines) {
+            rows.add(line.key().isEmpty() ? new String[] {line.words()} : new String[] {line.key(), line.words()});
+        }
+        StringBuilder words = new StringBuilder();
+        for (String[] row : rows) {
             words.append(row[0].strip())
                     .append(": ")
                     .append(row[row.length - 1].strip())

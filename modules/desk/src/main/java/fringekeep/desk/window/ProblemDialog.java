@@ -4,6 +4,7 @@ import fringekeep.archive.problem.Problem;
 import fringekeep.desk.look.Ink;
 import fringekeep.desk.look.Texts;
 import fringekeep.desk.look.Type;
+import fringekeep.desk.part.WordButton;
 import java.awt.BorderLayout;
 import java.awt.Color;
 import java.awt.Dialog;

@@ -6,6 +6,7 @@ import com.formdev.flatlaf.FlatLightLaf;
 import fringekeep.archive.Archive;
 import fringekeep.archive.Archives;
 import fringekeep.archive.Circumstances;
+import fringekeep.archive.Person;
 import fringekeep.archive.kind.Kinds;
 import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
@@ -25,6 +26,7 @@ import java.nio.file.Path;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.function.Consumer;
 import java.util.function.Supplier;
 import javax.swing.JFileChooser;
 import javax.swing.SwingUtilities;
@@ -39,7 +41,7 @@ public final class Program implements DeskHost {
 
     private final Runner runner = Runner.forWindow();
     private final Memory memory = Memory.ofUser();
-    private final Desk desk = new Desk(runner, Stops.shipped(), this, memory);
+    private final Desk desk = new Desk(runner, Stops.shipped(), this, memory, DeskStages.announced());
 
     private Program() {}
 
@@ -121,6 +123,16 @@ public final class Program implements DeskHost {
         }
     }
 
+    /** Files were dropped: an archive's folder is opened, the rest goes to the stages. */
+    boolean dropped(List<Path> files) {
+        boolean folder = files.size() == 1 && Files.isDirectory(files.get(0));
+        if (folder && (desk.archive().isEmpty() || Files.exists(files.get(0).resolve("archive.json")))) {
+            openArchive(files.get(0));
+            return true;
+        }
+        return desk.dropped(files);
+    }
+
     @Override
     public void foundArchive() {
         new FoundingSheet()
@@ -152,6 +164,54 @@ public final class Program implements DeskHost {
             Path file = chooser.getSelectedFile().toPath();
             runner.run("save", work -> write(picture, file), done -> {}, this::trouble);
         }
+    }
+
+    @Override
+    public List<Path> chooseFiles(String title) {
+        JFileChooser chooser = chooser(title);
+        chooser.setMultiSelectionEnabled(true);
+        return chooser.showOpenDialog(desk) == JFileChooser.APPROVE_OPTION
+                ? kept(List.of(chooser.getSelectedFiles()))
+                : List.of();
+    }
+
+    @Override
+    public Optional<Path> chooseFolder(String title) {
+        JFileChooser chooser = chooser(title);
+        chooser.setFileSelectionMode(JFileChooser.DIRECTORIES_ONLY);
+        return chooser.showOpenDialog(desk) == JFileChooser.APPROVE_OPTION
+                ? kept(List.of(chooser.getSelectedFile())).stream().findFirst()
+                : Optional.empty();
+    }
+
+    @Override
+    public Optional<Path> chooseToSave(String title, String suggested) {
+        JFileChooser chooser = chooser(title);
+        chooser.setSelectedFile(new File(suggested));
+        return chooser.showSaveDialog(desk) == JFileChooser.APPROVE_OPTION
+                ? kept(List.of(chooser.getSelectedFile())).stream().findFirst()
+                : Optional.empty();
+    }
+
+    private JFileChooser chooser(String title) {
+        JFileChooser chooser = new JFileChooser(memory.get("folder").orElse(null));
+        chooser.setDialogTitle(title);
+        return chooser;
+    }
+
+    /** The files as paths; the next question begins where this one ended. */
+    private List<Path> kept(List<File> files) {
+        files.stream()
+                .findFirst()
+                .map(File::getAbsoluteFile)
+                .map(File::getParent)
+                .ifPresent(folder -> memory.put("folder", folder));
+        return files.stream().map(File::toPath).toList();
+    }
+
+    @Override
+    public void askPerson(List<Person> persons, Consumer<String> then) {
+        PersonSheet.ask(window(), persons, then);
     }
 
     static Path write(Picture picture, Path file) throws ProblemException {

@@ -2,24 +2,32 @@ package fringekeep.desk.window;
 
 import static org.assertj.core.api.Assertions.assertThat;
 
+import fringekeep.archive.Person;
 import fringekeep.archive.problem.Problem;
 import fringekeep.desk.lab.InventedLab;
 import fringekeep.desk.run.Runner;
 import fringekeep.desk.session.Stops;
 import fringekeep.drawing.Picture;
 import java.awt.image.BufferedImage;
+import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.List;
+import java.util.Optional;
 import java.util.Set;
+import java.util.function.Consumer;
 import org.junit.jupiter.api.Test;
 
 /** The whole desk, without display, with jobs run at once. */
 class DeskTest {
     private final InventedLab lab = new InventedLab();
     private final List<Problem> troubles = new ArrayList<>();
-    private final Desk desk =
-            new Desk(new Runner(Runnable::run, Runnable::run), Stops.shipped(), new Host(), Memory.fleeting());
+    private final Desk desk = new Desk(
+            new Runner(Runnable::run, Runnable::run),
+            Stops.shipped(),
+            new Host(),
+            Memory.fleeting(),
+            new DeskStages(List.of()));
 
     private final class Host implements DeskHost {
         @Override
@@ -30,6 +38,26 @@ class DeskTest {
 
         @Override
         public void save(Picture picture) {}
+
+        @Override
+        public List<Path> chooseFiles(String title) {
+            return List.of();
+        }
+
+        @Override
+        public Optional<Path> chooseFolder(String title) {
+            return Optional.empty();
+        }
+
+        @Override
+        public Optional<Path> chooseToSave(String title, String suggested) {
+            return Optional.empty();
+        }
+
+        @Override
+        public void askPerson(List<Person> persons, Consumer<String> then) {
+            then.accept("A. Person");
+        }
 
         @Override
         public void trouble(List<Problem> problems) {

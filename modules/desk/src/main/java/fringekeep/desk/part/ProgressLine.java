@@ -1,4 +1,4 @@
-package fringekeep.desk.window;
+package fringekeep.desk.part;
 
 import fringekeep.desk.look.Ink;
 import fringekeep.desk.look.Painted;
@@ -13,12 +13,13 @@ import java.util.Optional;
 
 /** One bar on a hairline with a sentence; takes no room while nothing runs. */
 @SuppressWarnings("serial")
-final class ProgressLine extends Painted {
-    private static final Texts TEXTS = new Texts("fringekeep.desk.window.Texts", ProgressLine.class);
+public final class ProgressLine extends Painted {
+    private static final Texts TEXTS = new Texts("fringekeep.desk.part.Texts", ProgressLine.class);
 
     private transient Optional<Progress> now = Optional.empty();
 
-    void show(Optional<Progress> next) {
+    /** Shows how far it is; empty: nothing runs. */
+    public void show(Optional<Progress> next) {
         now = next;
         getAccessibleContext().setAccessibleName(next.map(ProgressLine::words).orElse(""));
         revalidate();

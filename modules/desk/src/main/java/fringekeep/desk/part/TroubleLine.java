@@ -1,4 +1,4 @@
-package fringekeep.desk.window;
+package fringekeep.desk.part;
 
 import fringekeep.archive.problem.Problem;
 import fringekeep.desk.look.Ink;
@@ -11,10 +11,11 @@ import java.util.List;
 
 /** A full-width line under the strip: what is wrong, where, what to do. Takes no room while there is nothing to say. */
 @SuppressWarnings("serial")
-final class CautionLine extends Painted {
+public final class TroubleLine extends Painted {
     private transient List<Problem> problems = List.of();
 
-    void show(List<Problem> next) {
+    /** Shows problems; an empty list takes no room. */
+    public void show(List<Problem> next) {
         problems = List.copyOf(next);
         StringBuilder words = new StringBuilder();
         next.forEach(problem ->

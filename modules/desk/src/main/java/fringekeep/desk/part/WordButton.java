@@ -1,4 +1,4 @@
-package fringekeep.desk.window;
+package fringekeep.desk.part;
 
 import fringekeep.desk.look.Ink;
 import fringekeep.desk.look.Pen;
@@ -11,10 +11,11 @@ import javax.swing.JButton;
 
 /** A button of the house: ink on the sheet with a hairline frame, or the one main button in reverse. */
 @SuppressWarnings("serial")
-final class WordButton extends JButton {
+public final class WordButton extends JButton {
     private final boolean main;
 
-    WordButton(String text, char mnemonic, boolean main) {
+    /** A button with a word; the main one of a sheet stands in reverse. */
+    public WordButton(String text, char mnemonic, boolean main) {
         super(text);
         this.main = main;
         setMnemonic(mnemonic);

@@ -1,0 +1,3 @@
+/** Figures and statements: the windows of this stage. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.figure.ui;

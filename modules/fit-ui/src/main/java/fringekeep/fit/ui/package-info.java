@@ -1,0 +1,3 @@
+/** Fitting by hand: the windows of this stage. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.fit.ui;
