@@ -63,7 +63,7 @@ public final class Runner {
 
     /** Runs a job for a place with its own ear for problems. */
     public <T> void run(String place, Job<T> job, Consumer<T> done, Consumer<List<Problem>> failed) {
-        Ticket ticket = new Ticket();
+        Ticket ticket = new Ticket(place);
         Ticket before = latest.put(place, ticket);
         if (before != null) {
             before.stopped = true;
@@ -119,9 +119,14 @@ public final class Runner {
     }
 
     private final class Ticket implements Work {
+        private final String place;
         private volatile boolean stopped;
         private volatile boolean reported;
         private volatile long last;
+
+        Ticket(String place) {
+            this.place = place;
+        }
 
         @Override
         public void progress(long done, long total, String what) {
@@ -129,7 +134,7 @@ public final class Runner {
             if (now - last > 100_000_000L) {
                 last = now;
                 reported = true;
-                window.execute(() -> progress.accept(Optional.of(new Progress(what, done, total))));
+                window.execute(() -> progress.accept(Optional.of(new Progress(what, done, total, place))));
             }
         }
 

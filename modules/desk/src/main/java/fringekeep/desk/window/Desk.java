@@ -60,7 +60,7 @@ public final class Desk extends JPanel {
     private final FirstSheet first;
     private final KeysSheet keysSheet = new KeysSheet();
     private final TroubleLine caution = new TroubleLine();
-    private final ProgressLine progress = new ProgressLine();
+    private final ProgressLine progress;
     private final StatusBar status = new StatusBar();
     private final CardLayout cards = new CardLayout();
     private final JPanel sheets = new JPanel(cards);
@@ -86,6 +86,7 @@ public final class Desk extends JPanel {
         this.stops = stops;
         this.memory = memory;
         this.stages = stages;
+        this.progress = new ProgressLine(one -> runner.stop(one.place()));
         this.hand = new Hand(this, runner, host, memory);
         this.persons = new DeskPersons(runner, memory, host, this::showStatus);
         this.place = start(stops);
@@ -553,6 +554,11 @@ public final class Desk extends JPanel {
 
     private static boolean isIn(java.awt.Component focus, java.awt.Container parent) {
         return focus != null && javax.swing.SwingUtilities.isDescendingFrom(focus, parent);
+    }
+
+    /** Asks the long work that is shown at the foot to stop. */
+    void stopWork() {
+        progress.askToStop();
     }
 
     /** Shows the keys, or goes back from them. */

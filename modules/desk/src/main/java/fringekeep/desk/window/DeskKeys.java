@@ -27,6 +27,7 @@ final class DeskKeys {
         key("F6", () -> desk.nextPane(1));
         key("shift F6", () -> desk.nextPane(-1));
         key("F1", desk::keys);
+        key("ctrl PERIOD", desk::stopWork);
         key("ESCAPE", desk::focusRows);
         for (String stroke : desk.stages().strokes()) {
             Runnable work =
