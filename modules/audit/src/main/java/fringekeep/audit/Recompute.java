@@ -16,7 +16,7 @@ import java.util.Set;
 import java.util.SortedMap;
 import java.util.TreeMap;
 
-/** Recomputes records and everything upstream of them, each link by itself. */
+/** Recomputes records and everything upstream of them, each link by itself; {@link Through} feeds results on. */
 public final class Recompute {
     private Recompute() {}
 
@@ -53,11 +53,7 @@ public final class Recompute {
 
     /** Recomputes the targets and all records they were made from. */
     public static Verdicts upstreamOf(Archive archive, Collection<Hash> targets, Work work) throws StoppedException {
-        Set<Hash> order = new LinkedHashSet<>();
-        for (Hash target : targets) {
-            order.addAll(archive.graph().upstream(target));
-            order.add(target);
-        }
+        List<Hash> order = order(archive, targets);
         List<Recomputed> verdicts = new ArrayList<>();
         for (Hash record : order) {
             work.check();
@@ -69,5 +65,15 @@ public final class Recompute {
                             : new Recomputed(record, Recomputed.Verdict.NOT_COMPUTABLE, 0, List.of(), "input-missing"));
         }
         return new Verdicts(verdicts);
+    }
+
+    /** The targets and all they rest on, each once, what others rest on first. */
+    static List<Hash> order(Archive archive, Collection<Hash> targets) {
+        Set<Hash> order = new LinkedHashSet<>();
+        for (Hash target : targets) {
+            order.addAll(archive.graph().upstream(target));
+            order.add(target);
+        }
+        return List.copyOf(order);
     }
 }

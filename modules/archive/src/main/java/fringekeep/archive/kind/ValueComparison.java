@@ -1,6 +1,7 @@
 package fringekeep.archive.kind;
 
 import fringekeep.archive.internal.records.SchemaWalk;
+import fringekeep.archive.json.CanonicalJson;
 import fringekeep.archive.json.Json;
 import fringekeep.archive.json.JsonArray;
 import fringekeep.archive.json.JsonNumber;
@@ -8,6 +9,7 @@ import fringekeep.archive.json.JsonObject;
 import fringekeep.archive.json.JsonPointer;
 import fringekeep.archive.problem.ProblemException;
 import fringekeep.archive.record.PartName;
+import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.HashSet;
@@ -191,8 +193,13 @@ public final class ValueComparison {
                 numbers(pointer, before.value(), after.value(), deviation);
             }
         } else if (!kept.equals(now)) {
-            other(pointer, kept.toString(), now.toString());
+            other(pointer, written(kept), written(now));
         }
+    }
+
+    /** A value as it would be written. */
+    private static String written(Json value) {
+        return new String(CanonicalJson.write(value), StandardCharsets.UTF_8);
     }
 
     private void objects(String pointer, JsonObject kept, JsonObject now) {
@@ -204,8 +211,8 @@ public final class ValueComparison {
             if (before.isEmpty() || after.isEmpty()) {
                 other(
                         JsonPointer.child(pointer, name),
-                        before.map(Json::toString).orElse("absent"),
-                        after.map(Json::toString).orElse("absent"));
+                        before.map(ValueComparison::written).orElse("absent"),
+                        after.map(ValueComparison::written).orElse("absent"));
             } else {
                 OptionalDouble u = name.equals("value") ? kept.number("u") : OptionalDouble.empty();
                 values(JsonPointer.child(pointer, name), before.get(), after.get(), u);

@@ -27,12 +27,29 @@ public final class Recomputing {
     private Recomputing() {}
 
     /**
+     * What came of an attempt.
+     *
+     * @param verdict how it compares with what was recorded
+     * @param outcome what came out; empty where nothing was computed
+     */
+    public record Attempt(Recomputed verdict, Optional<Outcome.Computed> outcome) {}
+
+    /**
      * Recomputes one record, each link by itself: its inputs are taken as recorded.
      *
      * @throws StoppedException if the work was stopped
      */
     public static Recomputed recompute(RecordView record, Inputs inputs, Kinds kinds, Work work)
             throws StoppedException {
+        return attempt(record, inputs, kinds, work).verdict();
+    }
+
+    /**
+     * Recomputes one record from the inputs given, which may be other than those recorded, and hands on what came out.
+     *
+     * @throws StoppedException if the work was stopped
+     */
+    public static Attempt attempt(RecordView record, Inputs inputs, Kinds kinds, Work work) throws StoppedException {
         Optional<String> hindrance = hindrance(record, inputs, kinds);
         if (hindrance.isPresent()) {
             return notComputable(record.fingerprint(), hindrance.get());
@@ -45,17 +62,19 @@ public final class Recomputing {
             String words = none.reasons().isEmpty()
                     ? "no result"
                     : none.reasons().get(0).what();
-            return new Recomputed(record.fingerprint(), Verdict.DIFFERS, -1, List.of(), words);
+            return new Attempt(
+                    new Recomputed(record.fingerprint(), Verdict.DIFFERS, -1, List.of(), words), Optional.empty());
         }
+        Outcome.Computed computed = (Outcome.Computed) outcome;
         try {
-            return compare(record, kind, (Outcome.Computed) outcome);
+            return new Attempt(compare(record, kind, computed), Optional.of(computed));
         } catch (ProblemException e) {
             return notComputable(record.fingerprint(), "payload-missing");
         }
     }
 
-    private static Recomputed notComputable(Hash record, String reason) {
-        return new Recomputed(record, Verdict.NOT_COMPUTABLE, 0, List.of(), reason);
+    private static Attempt notComputable(Hash record, String reason) {
+        return new Attempt(new Recomputed(record, Verdict.NOT_COMPUTABLE, 0, List.of(), reason), Optional.empty());
     }
 
     private static Optional<String> hindrance(RecordView record, Inputs inputs, Kinds kinds) {

@@ -5,7 +5,6 @@ import java.sql.PreparedStatement;
 import java.sql.ResultSet;
 import java.sql.SQLException;
 import java.util.ArrayList;
-import java.util.Iterator;
 import java.util.List;
 import java.util.Optional;
 
@@ -15,7 +14,9 @@ public final class Sql {
     public static final int IN_SIZE = 200;
 
     /** {@code ?, ?, …} of {@link #IN_SIZE} marks. */
-    public static final String MARKS = String.join(",", java.util.Collections.nCopies(IN_SIZE, "?"));
+    public static final String MARKS = marks(IN_SIZE);
+
+    private static final int FEW = 8;
 
     private Sql() {}
 
@@ -56,30 +57,36 @@ public final class Sql {
 
     /**
      * Asks with many keys, {@link #IN_SIZE} at a time; the text holds {@link #MARKS} once, after it the fixed values. The
-     * last batch is padded with its first key.
+     * last batch is padded with its first key. One key or few are asked for by themselves: with {@link #IN_SIZE} marks the
+     * engine compares every row of a small table with every mark instead of using the index.
      */
     public static <K, T> List<T> in(
             Connection connection, String text, Iterable<K> keys, RowOf<T> mapping, Object... values)
             throws SQLException {
+        List<Object> all = new ArrayList<>();
+        keys.forEach(all::add);
         List<T> found = new ArrayList<>();
-        Iterator<K> iterator = keys.iterator();
-        if (!iterator.hasNext()) {
+        if (all.isEmpty()) {
             return found;
         }
-        try (PreparedStatement statement = connection.prepareStatement(text)) {
-            while (iterator.hasNext()) {
-                Object first = iterator.next();
-                bindOne(statement, 1, first);
-                for (int i = 2; i <= IN_SIZE; i++) {
-                    bindOne(statement, i, iterator.hasNext() ? iterator.next() : first);
+        int size = all.size() == 1 ? 1 : all.size() <= FEW ? FEW : IN_SIZE;
+        String fitting = size == IN_SIZE ? text : text.replace(MARKS, marks(size));
+        try (PreparedStatement statement = connection.prepareStatement(fitting)) {
+            for (int from = 0; from < all.size(); from += size) {
+                for (int i = 0; i < size; i++) {
+                    bindOne(statement, i + 1, all.get(from + i < all.size() ? from + i : from));
                 }
                 for (int i = 0; i < values.length; i++) {
-                    bindOne(statement, IN_SIZE + 1 + i, values[i]);
+                    bindOne(statement, size + 1 + i, values[i]);
                 }
                 found.addAll(rows(statement, mapping));
             }
         }
         return found;
+    }
+
+    private static String marks(int size) {
+        return String.join(",", java.util.Collections.nCopies(size, "?"));
     }
 
     private static <T> List<T> rows(PreparedStatement statement, RowOf<T> mapping) throws SQLException {
