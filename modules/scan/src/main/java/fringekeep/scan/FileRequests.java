@@ -11,6 +11,7 @@ import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.InputReference;
 import fringekeep.archive.record.Moment;
 import fringekeep.archive.record.PartName;
+import fringekeep.archive.record.PersonId;
 import fringekeep.scan.internal.problem.ScanProblems;
 import fringekeep.scan.internal.reading.FileReader;
 import fringekeep.scan.internal.reading.Profile;
@@ -31,17 +32,16 @@ import java.util.Set;
 /** Turns files into requests for scans: reads them whole first, so that a refused file leaves nothing behind. */
 final class FileRequests {
     private final Archive archive;
-    private final TakeInFiles.Request request;
+    private final boolean fileTimes;
+    private final Optional<PersonId> person;
     private final GuessProfile guess;
-    private final Set<String> asked = new HashSet<>();
+    private final Set<String> requested = new HashSet<>();
 
-    FileRequests(Archive archive, TakeInFiles.Request request) throws ProblemException {
+    FileRequests(Archive archive, boolean fileTimes, Optional<PersonId> person) {
         this.archive = archive;
-        this.request = request;
+        this.fileTimes = fileTimes;
+        this.person = person;
         this.guess = new GuessProfile(archive);
-        if (request.profile().isPresent()) {
-            profile(request.profile().get());
-        }
     }
 
     /**
@@ -54,11 +54,12 @@ final class FileRequests {
      */
     record Gathered(Hash raw, Hash profile, List<NewRecord> scans, List<Hash> known) {}
 
-    Gathered of(Path file) throws ProblemException {
+    Gathered of(Path file, Optional<Hash> asked) throws ProblemException {
         String name = String.valueOf(file.getFileName());
         byte[] bytes = bytes(file);
-        Hash chosen = request.profile().isPresent() ? request.profile().get() : guess.best(bytes, name);
-        FileReader reader = new FileReader(Profile.of(profile(chosen).content()), bytes, name);
+        Hash chosen = asked.isPresent() ? asked.get() : guess.best(bytes, name);
+        FileReader reader =
+                new FileReader(Profile.of(requireProfile(archive, chosen).content()), bytes, name);
         List<Reading> sections = new ArrayList<>();
         for (int section = 0; section < reader.sections(); section++) {
             sections.add(reader.read(section));
@@ -71,14 +72,15 @@ final class FileRequests {
             Optional<Hash> same = earlier.readBy(chosen, section);
             if (same.isPresent()) {
                 known.add(same.get());
-            } else if (asked.add(raw.hash() + " " + chosen + " " + section)) {
+            } else if (requested.add(raw.hash() + " " + chosen + " " + section)) {
                 scans.add(scan(file, raw, chosen, section, sections.get(section), earlier));
             }
         }
         return new Gathered(raw.hash(), chosen, scans, known);
     }
 
-    private static byte[] bytes(Path file) throws ProblemException {
+    /** All bytes of a file. */
+    static byte[] bytes(Path file) throws ProblemException {
         try {
             return Files.readAllBytes(file);
         } catch (IOException e) {
@@ -87,7 +89,8 @@ final class FileRequests {
         }
     }
 
-    private RecordView profile(Hash hash) throws ProblemException {
+    /** The reading profile of a fingerprint. */
+    static RecordView requireProfile(Archive archive, Hash hash) throws ProblemException {
         Optional<RecordView> view = archive.record(hash);
         if (view.isEmpty() || !view.get().head().kind().equals(ReadingProfileKind.NAME)) {
             throw new ProblemException(ScanProblems.of("scan.not-a-profile", archive.label(hash)));
@@ -98,7 +101,7 @@ final class FileRequests {
     private NewRecord scan(Path file, Archive.RawTaken raw, Hash profile, int section, Reading reading, Earlier earlier)
             throws ProblemException {
         JsonObject named = JsonObject.EMPTY.with("name", String.valueOf(file.getFileName()));
-        JsonObject described = request.fileTimes() ? named.with("modified", modified(file)) : named;
+        JsonObject described = fileTimes ? named.with("modified", modified(file)) : named;
         Map<PartName, JsonObject> parts = new EnumMap<>(PartName.class);
         parts.put(PartName.CHOICES, JsonObject.EMPTY.with("file", described).with("section", section));
         if (!reading.header().personal().isEmpty()) {
@@ -115,7 +118,7 @@ final class FileRequests {
                 List.of(),
                 earlier.replacedBy(profile, section),
                 Optional.empty(),
-                request.person());
+                person);
     }
 
     private JsonObject modified(Path file) throws ProblemException {

@@ -80,7 +80,7 @@ public final class GuessProfile {
     }
 
     /** Current profiles that are not withdrawn, the newest first. */
-    private List<Hash> profiles() {
+    List<Hash> profiles() {
         Graph graph = archive.graph();
         List<Hash> profiles = new ArrayList<>();
         long from = 1;

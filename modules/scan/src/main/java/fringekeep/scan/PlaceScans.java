@@ -4,10 +4,12 @@ import fringekeep.archive.Archive;
 import fringekeep.archive.NewRecord;
 import fringekeep.archive.Prepared;
 import fringekeep.archive.graph.Graph;
+import fringekeep.archive.graph.StateName;
 import fringekeep.archive.json.JsonObject;
 import fringekeep.archive.kind.RecordView;
 import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
+import fringekeep.archive.problem.Work;
 import fringekeep.archive.record.AboutReference;
 import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.PartName;
@@ -73,12 +75,26 @@ public final class PlaceScans {
      * @throws ProblemException all that is wrong with any of them; nothing is stored then
      */
     public List<Hash> place(List<Place> places, PersonId person) throws ProblemException {
+        return place(places, person, Work.QUIET);
+    }
+
+    /**
+     * Places scans with progress. Stopping while they are examined stores nothing; stopping while they are recorded keeps what
+     * is recorded.
+     *
+     * @return the placement of each, in order; when stopped, of those at the begin that are done
+     * @throws ProblemException all that is wrong with any of them; nothing is stored then
+     */
+    public List<Hash> place(List<Place> places, PersonId person, Work work) throws ProblemException {
         Graph graph = archive.graph();
         Set<ThingId> things = new HashSet<>();
         List<Problem> problems = new ArrayList<>();
         List<Hash> placements = new ArrayList<>();
         List<Prepared> fresh = new ArrayList<>();
         for (Place place : places) {
+            if (work.stopped()) {
+                return List.of();
+            }
             try {
                 RecordView scan = scan(place.scan());
                 if (!things.add(scan.head().thing())) {
@@ -96,12 +112,81 @@ public final class PlaceScans {
             } catch (ProblemException e) {
                 e.problems().forEach(problem -> problems.add(located(problem, place)));
             }
+            work.progress(things.size(), places.size(), "examined");
         }
         if (!problems.isEmpty()) {
             throw new ProblemException(problems);
         }
+        return record(placements, fresh, work);
+    }
+
+    /** What placing a scan would do. */
+    public enum Effect {
+        /** The scan gets its first placement. */
+        PLACES,
+        /** Its placement is corrected. */
+        CORRECTS,
+        /** Its placement says the same already; nothing is recorded. */
+        KEEPS,
+        /** Several placements of the scan are in dispute; it is refused. */
+        DISPUTED
+    }
+
+    /**
+     * What would become of one place.
+     *
+     * @param effect what placing would do
+     * @param before the placement that stands now
+     * @param outdated records that a correction would make outdated, in order of dependence
+     */
+    public record Foreseen(Effect effect, Optional<RecordView> before, List<Hash> outdated) {
+        /** Copies. */
+        public Foreseen {
+            outdated = List.copyOf(outdated);
+        }
+    }
+
+    /**
+     * Foresees what placing would do, and stores nothing.
+     *
+     * @return one answer a place, in order
+     * @throws ProblemException if one of them names no scan
+     */
+    public List<Foreseen> foresee(List<Place> places) throws ProblemException {
+        Graph graph = archive.graph();
+        List<Foreseen> foreseen = new ArrayList<>();
+        for (Place place : places) {
+            List<RecordView> before = placements(archive, graph, scan(place.scan()));
+            if (before.size() > 1) {
+                foreseen.add(new Foreseen(Effect.DISPUTED, Optional.empty(), List.of()));
+            } else if (before.isEmpty()) {
+                foreseen.add(new Foreseen(Effect.PLACES, Optional.empty(), List.of()));
+            } else if (says(before.get(0), place)) {
+                foreseen.add(new Foreseen(Effect.KEEPS, Optional.of(before.get(0)), List.of()));
+            } else {
+                foreseen.add(new Foreseen(
+                        Effect.CORRECTS,
+                        Optional.of(before.get(0)),
+                        wouldOutdate(graph, before.get(0).fingerprint())));
+            }
+        }
+        return foreseen;
+    }
+
+    private static List<Hash> wouldOutdate(Graph graph, Hash placement) {
+        return graph.downstream(placement).stream()
+                .filter(record -> !graph.states(record).contains(StateName.CORRECTED))
+                .filter(record -> !graph.states(record).contains(StateName.OUTDATED))
+                .toList();
+    }
+
+    private List<Hash> record(List<Hash> placements, List<Prepared> fresh, Work work) throws ProblemException {
         for (int from = 0; from < fresh.size(); from += TRANSACTION) {
+            if (work.stopped()) {
+                return placements.subList(0, placements.indexOf(fresh.get(from).fingerprint()));
+            }
             archive.record(fresh.subList(from, Math.min(from + TRANSACTION, fresh.size())));
+            work.progress(Math.min(from + TRANSACTION, fresh.size()), fresh.size(), "placed");
         }
         return placements;
     }

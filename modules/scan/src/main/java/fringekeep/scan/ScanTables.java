@@ -36,7 +36,8 @@ final class ScanTables {
         }
     }
 
-    private static CountTable table(JsonObject result, Map<String, double[]> columns) throws ProblemException {
+    /** The table of a result and its columns by name. */
+    static CountTable table(JsonObject result, Map<String, double[]> columns) throws ProblemException {
         List<CountTable.Column> axes = new ArrayList<>();
         for (JsonObject axis : result.array("axes").objects()) {
             axes.add(column(axis, columns));

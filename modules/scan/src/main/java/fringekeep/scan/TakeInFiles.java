@@ -16,6 +16,7 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.Consumer;
 
 /**
  * Takes many raw files in by one reading profile, or each by the profile that fits it best. A file that cannot be read is
@@ -96,35 +97,70 @@ public final class TakeInFiles {
      * @throws ProblemException if the profile is no reading profile of this archive; troubles of single files are outcomes
      */
     public List<FileOutcome> takeIn(Request request, Work work) throws ProblemException {
-        FileRequests requests = new FileRequests(archive, request);
+        if (request.profile().isPresent()) {
+            FileRequests.requireProfile(archive, request.profile().get());
+        }
+        List<Chosen> chosen = request.files().stream()
+                .map(file -> new Chosen(file, request.profile()))
+                .toList();
+        return takeEach(chosen, request.fileTimes(), request.person(), work, outcome -> {});
+    }
+
+    /**
+     * A file and how it is to be read.
+     *
+     * @param file the file
+     * @param profile the reading profile; empty: the best guess
+     */
+    public record Chosen(Path file, Optional<Hash> profile) {}
+
+    /**
+     * Takes files in, each by a profile of its own.
+     *
+     * @param files in the order in which scans are to be numbered
+     * @param fileTimes whether the time of each file is recorded with its name
+     * @param person who takes them in, if that is to be recorded
+     * @param told hears the outcome of each file as soon as it is durable, on the calling thread
+     * @return one outcome a file, in the order asked; a profile that is none refuses its file
+     */
+    public List<FileOutcome> takeEach(
+            List<Chosen> files, boolean fileTimes, Optional<PersonId> person, Work work, Consumer<FileOutcome> told) {
+        FileRequests requests = new FileRequests(archive, fileTimes, person);
         List<FileOutcome> outcomes = new ArrayList<>();
         List<Pending> pending = new ArrayList<>();
-        for (Path file : request.files()) {
+        for (Chosen chosen : files) {
             if (work.stopped()) {
                 break;
             }
-            Pending next = read(file, requests, pending);
-            pending.add(next);
+            pending.add(read(chosen, requests, pending));
             if (pending.stream().mapToInt(each -> each.prepared().size()).sum() >= GATHERED) {
-                outcomes.addAll(commit(pending));
+                tell(commit(pending), outcomes, told);
                 pending.clear();
             }
-            work.progress(outcomes.size() + pending.size(), request.files().size(), String.valueOf(file.getFileName()));
+            String name = String.valueOf(chosen.file().getFileName());
+            work.progress(outcomes.size() + pending.size(), files.size(), name);
         }
-        outcomes.addAll(commit(pending));
-        for (Path file :
-                request.files().subList(outcomes.size(), request.files().size())) {
-            outcomes.add(refused(file, State.STOPPED, List.of(ScanProblems.of("scan.stopped", file.toString()))));
+        tell(commit(pending), outcomes, told);
+        for (Chosen chosen : files.subList(outcomes.size(), files.size())) {
+            Path file = chosen.file();
+            Problem stopped = ScanProblems.of("scan.stopped", file.toString());
+            tell(List.of(refused(file, State.STOPPED, List.of(stopped))), outcomes, told);
         }
         return outcomes;
+    }
+
+    private static void tell(List<FileOutcome> next, List<FileOutcome> outcomes, Consumer<FileOutcome> told) {
+        outcomes.addAll(next);
+        next.forEach(told);
     }
 
     /** A file that was read, and what is to be recorded of it. */
     private record Pending(FileOutcome outcome, List<Prepared> prepared) {}
 
-    private Pending read(Path file, FileRequests requests, List<Pending> pending) {
+    private Pending read(Chosen chosen, FileRequests requests, List<Pending> pending) {
+        Path file = chosen.file();
         try {
-            FileRequests.Gathered gathered = requests.of(file);
+            FileRequests.Gathered gathered = requests.of(file, chosen.profile());
             List<Prepared> prepared = new ArrayList<>();
             List<Hash> scans = new ArrayList<>(gathered.known());
             List<String> findings = new ArrayList<>();
