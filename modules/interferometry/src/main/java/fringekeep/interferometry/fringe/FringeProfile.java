@@ -86,7 +86,7 @@ public final class FringeProfile {
      * The signed root of the rise of the profile, (fitted &minus; assumed visibility) in standard errors.
      *
      * @param assumed visibility, not negative
-     * @return w; infinite where the assumed value is not possible at all
+     * @return w; infinite where the assumed value is not possible at all, NaN where the profile is {@link #undetermined}
      */
     public double visibilityDeviate(double assumed) {
         double rise = likelihood ? likelihoodRise(1, assumed) * square(visibilityRatio) : quadraticRise(assumed);
@@ -98,7 +98,7 @@ public final class FringeProfile {
      * The signed root of the rise of the profile over the phase.
      *
      * @param assumed phase (rad)
-     * @return (fitted &minus; assumed phase) in standard errors
+     * @return (fitted &minus; assumed phase) in standard errors, NaN where the profile is {@link #undetermined}
      */
     public double phaseDeviate(double assumed) {
         double turned = phase - assumed;
@@ -147,9 +147,24 @@ public final class FringeProfile {
         return Optional.of(new Interval(level, low, edge(reach, visibility, level)));
     }
 
-    /** Least-squares profiles need a covariance that can be inverted; points without counts may leave none. */
+    /**
+     * Why there is no profile: least-squares profiles need a covariance that can be inverted, and points without counts may
+     * leave none.
+     *
+     * @return the reason, empty where there is a profile
+     */
+    public Optional<FringeFailure> undetermined() {
+        if ((likelihood || SymmetricMatrix.factor(widened.covariance(), 3, 1e-14)) && visibilityError > 0) {
+            return Optional.empty();
+        }
+        return Optional.of(new FringeFailure(
+                FringeFailure.Reason.NOT_DETERMINED,
+                "The covariance of mean, cosine and sine is singular, so that no interval can be made from it; use the"
+                        + " Poisson likelihood or the expected covariance."));
+    }
+
     private boolean determined() {
-        return (likelihood || SymmetricMatrix.factor(widened.covariance(), 3, 1e-14)) && visibilityError > 0;
+        return undetermined().isEmpty();
     }
 
     /** The border between a refused and an accepted visibility, by bisection to 1e-9 of the standard error. */
@@ -321,7 +336,8 @@ public final class FringeProfile {
     private double[] precision() {
         double[] matrix = widened.covariance();
         if (!SymmetricMatrix.factor(matrix, 3, 1e-14)) {
-            throw new IllegalStateException("covariance of mean, cosine and sine is singular");
+            java.util.Arrays.fill(matrix, Double.NaN);
+            return matrix;
         }
         return SymmetricMatrix.inverse(matrix, 3);
     }

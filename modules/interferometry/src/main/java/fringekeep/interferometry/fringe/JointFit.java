@@ -3,7 +3,6 @@ package fringekeep.interferometry.fringe;
 import fringekeep.interferometry.statistics.Distributions;
 import fringekeep.interferometry.statistics.Estimate;
 import fringekeep.interferometry.statistics.Interval;
-import fringekeep.interferometry.statistics.PoissonDeviance;
 import fringekeep.interferometry.statistics.ScalarSearch;
 import java.util.ArrayList;
 import java.util.List;
@@ -13,11 +12,21 @@ import java.util.List;
  *
  * <p>The likelihood of the common visibility is that of the Poisson counts, largest over each scan's mean and integrated
  * over its phase with equal weight. (Taking the largest over each phase too would be biased upwards for weak scans however
- * many there are: J. Neyman and E. L. Scott, Econometrica 16, 1 (1948).) Backgrounds, drifts, second harmonics and phase
- * drifts are held at each scan's own fit; the period is that of the options.
+ * many there are: J. Neyman and E. L. Scott, Econometrica 16, 1 (1948).) The period is that of the options. What becomes of
+ * backgrounds, drifts, second harmonics and phase drifts is a choice, {@link Nuisances}.
  */
 public final class JointFit implements JointOutcome {
-    private static final int NODES = 96;
+    /** What becomes of the parameters beside mean, visibility and phase. */
+    public enum Nuisances {
+        /** Held at each scan's own fit: fast, but the error of V lacks theirs. */
+        HELD,
+        /**
+         * Fitted anew at every visibility and phase, so that the likelihood of V is largest over them too. A background
+         * estimated from dark counts is fitted jointly with those; the uncertainty of a known one, common to all scans, is
+         * carried to the standard error (not to the interval) by fits with the background moved by it.
+         */
+        FREE
+    }
 
     private final List<FringeFit> scans;
     private final List<ScanLikelihood> likelihoods;
@@ -25,6 +34,7 @@ public final class JointFit implements JointOutcome {
     private final double standardError;
     private final double largest;
     private final double upperEnd;
+    private double backgroundError;
 
     private JointFit(List<FringeFit> scans, List<ScanLikelihood> likelihoods) {
         this.scans = List.copyOf(scans);
@@ -50,23 +60,36 @@ public final class JointFit implements JointOutcome {
     }
 
     /**
-     * Fits scans jointly.
+     * Fits scans jointly with the nuisance parameters held at each scan's own fit.
      *
      * @param data the scans, at least one
      * @param options how each is fitted; Poisson likelihood at a fixed period
      * @return the fit, or the reason of the first scan that has no fit
      */
     public static JointOutcome of(List<FringeData> data, FringeOptions options) {
+        return of(data, options, Nuisances.HELD);
+    }
+
+    /**
+     * Fits scans jointly.
+     *
+     * @param data the scans, at least one
+     * @param options how each is fitted; Poisson likelihood at a fixed period
+     * @param nuisances what becomes of the parameters beside mean, visibility and phase
+     * @return the fit, or the reason why there is none
+     */
+    public static JointOutcome of(List<FringeData> data, FringeOptions options, Nuisances nuisances) {
         if (options.periodFree() || options.estimator() != Estimator.POISSON_LIKELIHOOD) {
             throw new IllegalArgumentException("a joint fit is by Poisson likelihood at a fixed period");
         }
         if (data.isEmpty()) {
             throw new IllegalArgumentException("no scan to fit");
         }
+        FringeOptions used = nuisances == Nuisances.FREE ? withDarkCountsJoint(options) : options;
         List<FringeFit> fits = new ArrayList<>();
         List<ScanLikelihood> likelihoods = new ArrayList<>();
         for (int k = 0; k < data.size(); k++) {
-            FringeOutcome outcome = FringeFitter.fit(data.get(k), options);
+            FringeOutcome outcome = FringeFitter.fit(data.get(k), used);
             if (outcome instanceof FringeFailure failure) {
                 return new FringeFailure(failure.reason(), "Scan " + k + ": " + failure.words());
             }
@@ -75,10 +98,48 @@ public final class JointFit implements JointOutcome {
                 return new FringeFailure(
                         FringeFailure.Reason.NO_COUNTS, "Scan " + k + " holds no signal above its background.");
             }
+            ScanLikelihood likelihood = nuisances == Nuisances.FREE ? new FreeLikelihood(fit) : new HeldLikelihood(fit);
+            if (!likelihood.determined()) {
+                return new FringeFailure(
+                        FringeFailure.Reason.NOT_DETERMINED,
+                        "Scan " + k + ": the fitted drift leaves no signal at some point; fit it with a lower order.");
+            }
             fits.add(fit);
-            likelihoods.add(new ScanLikelihood(fit));
+            likelihoods.add(likelihood);
         }
-        return new JointFit(fits, likelihoods);
+        JointFit joint = new JointFit(fits, likelihoods);
+        if (!(joint.largest > ScanLikelihood.IMPOSSIBLE) || Double.isNaN(joint.standardError)) {
+            return new FringeFailure(
+                    FringeFailure.Reason.NO_CONVERGENCE,
+                    "No common visibility makes all scans possible; fit them one by one and see which differs.");
+        }
+        return nuisances == Nuisances.FREE ? joint.carryingBackground(data, options) : joint;
+    }
+
+    private static FringeOptions withDarkCountsJoint(FringeOptions options) {
+        return options.background().sort() == Background.Sort.ESTIMATED
+                ? options.background(Background.JOINT)
+                : options;
+    }
+
+    /** Carries the uncertainty of a known background; numerically, JCGM 100:2008, 5.1.3 note 2. */
+    private JointOutcome carryingBackground(List<FringeData> data, FringeOptions options) {
+        Background background = options.background();
+        if (background.sort() != Background.Sort.KNOWN || background.standardUncertainty() == 0) {
+            return this;
+        }
+        double[] moved = new double[2];
+        for (int side = 0; side < 2; side++) {
+            double rate = background.rate() + (side == 0 ? 1 : -1) * background.standardUncertainty();
+            JointOutcome outcome = of(data, options.background(Background.known(rate, 0)), Nuisances.FREE);
+            if (outcome instanceof FringeFailure failure) {
+                return new FringeFailure(
+                        failure.reason(), "With the background moved by its uncertainty: " + failure.words());
+            }
+            moved[side] = outcome.jointOrThrow().visibility;
+        }
+        backgroundError = 0.5 * Math.abs(moved[0] - moved[1]);
+        return this;
     }
 
     private double logLikelihood(double v) {
@@ -109,7 +170,11 @@ public final class JointFit implements JointOutcome {
      * @return V
      */
     public Estimate visibility() {
-        return new Estimate(visibility, standardError);
+        return new Estimate(
+                visibility,
+                backgroundError == 0
+                        ? standardError
+                        : Math.sqrt(standardError * standardError + backgroundError * backgroundError));
     }
 
     /**
@@ -162,97 +227,5 @@ public final class JointFit implements JointOutcome {
      */
     public List<FringeFit> scans() {
         return scans;
-    }
-
-    /** ln of one scan's likelihood against V, best over the mean, integrated over the phase. */
-    private static final class ScanLikelihood {
-        private final double[] counts;
-        private final double[] gains;
-        private final double[] offsets;
-        private final double[] cosines;
-        private final double[] sines;
-        private final double startMean;
-        private final double reference;
-        private final double phase;
-        private final double reachTimesVisibility;
-
-        ScanLikelihood(FringeFit fit) {
-            FringeModel model = new FringeModel(fit.data(), fit.options());
-            double[] theta = fit.inside().theta().clone();
-            int n = model.points;
-            counts = java.util.Arrays.copyOf(model.observed, n);
-            gains = new double[n];
-            offsets = new double[n];
-            cosines = new double[n];
-            sines = new double[n];
-            startMean = theta[0];
-            theta[1] = 0;
-            theta[2] = 0;
-            model.evaluate(theta);
-            for (int i = 0; i < n; i++) {
-                int at = i * model.parameters;
-                gains[i] = model.slopes[at];
-                cosines[i] = model.slopes[at + 1] / model.slopes[at];
-                sines[i] = model.slopes[at + 2] / model.slopes[at];
-                offsets[i] = model.expected[i] - gains[i] * theta[0];
-            }
-            reference = 0.5 * fit.deviance();
-            HarmonicEstimate widened = fit.inside().widened();
-            phase = StrictMath.atan2(0.0 - widened.sine(), widened.cosine());
-            reachTimesVisibility = 10 * widened.quadratureNoise();
-        }
-
-        double at(double v) {
-            double[] logs = new double[NODES];
-            double highest = Double.NEGATIVE_INFINITY;
-            // Ten standard errors to either side of the fitted phase hold all of a strong scan's likelihood.
-            double reach = v * Math.PI > reachTimesVisibility ? reachTimesVisibility / v : Math.PI;
-            for (int k = 0; k < NODES; k++) {
-                double angle = phase + reach * (2.0 * k / NODES - 1);
-                logs[k] = best(v * StrictMath.cos(angle), -v * StrictMath.sin(angle));
-                highest = Math.max(highest, logs[k]);
-            }
-            if (highest == Double.NEGATIVE_INFINITY) {
-                return -1e9;
-            }
-            double sum = 0;
-            for (double log : logs) {
-                sum += StrictMath.exp(log - highest);
-            }
-            return highest + StrictMath.log(sum / NODES * (reach / Math.PI)) + reference;
-        }
-
-        /** ln L largest over the mean by Newton steps kept positive. */
-        private double best(double a, double b) {
-            double mean = startMean;
-            for (int step = 0; step < 30; step++) {
-                double slope = 0;
-                double curvature = 0;
-                for (int i = 0; i < counts.length; i++) {
-                    double shape = gains[i] * (1 + a * cosines[i] + b * sines[i]);
-                    double mu = offsets[i] + mean * shape;
-                    slope -= shape;
-                    if (counts[i] > 0) {
-                        if (!(mu > 0)) {
-                            return Double.NEGATIVE_INFINITY;
-                        }
-                        slope += counts[i] * shape / mu;
-                        curvature += counts[i] * shape * shape / (mu * mu);
-                    }
-                }
-                double move = curvature > 0 ? slope / curvature : 0;
-                double next = mean + move;
-                mean = next > 0.1 * mean ? next : 0.1 * mean;
-                if (Math.abs(move) <= 1e-10 * mean) {
-                    break;
-                }
-            }
-            double sum = 0;
-            for (int i = 0; i < counts.length; i++) {
-                double mu = offsets[i] + mean * gains[i] * (1 + a * cosines[i] + b * sines[i]);
-                sum -= 0.5 * (mu < 0 ? Double.POSITIVE_INFINITY : PoissonDeviance.term(counts[i], mu));
-            }
-            return sum;
-        }
     }
 }

@@ -15,8 +15,10 @@ import java.util.Optional;
  * @param phasePerSusceptibility factor c: phase = &phi;_0 + &chi; c q (rad per unit of &chi; and q), not zero
  * @param lowest                 lowest susceptibility searched
  * @param highest                highest susceptibility searched, &gt; lowest
+ * @param susceptibility         what the slope is: {@link Parameter#ELECTRIC_SUSCEPTIBILITY} or
+ *     {@link Parameter#MAGNETIC_SUSCEPTIBILITY}
  */
-public record DeflectionFit(double phasePerSusceptibility, double lowest, double highest) {
+public record DeflectionFit(double phasePerSusceptibility, double lowest, double highest, Parameter susceptibility) {
     private static final int MOST_STEPS = 100_000;
     private static final double NEARBY = 9.0;
     private static final double TURN = 2.0 * Math.PI;
@@ -27,12 +29,27 @@ public record DeflectionFit(double phasePerSusceptibility, double lowest, double
             throw new IllegalArgumentException("a deflection needs a phase per susceptibility ("
                     + phasePerSusceptibility + ") and a range to search (" + lowest + " to " + highest + ")");
         }
+        if (susceptibility != Parameter.ELECTRIC_SUSCEPTIBILITY
+                && susceptibility != Parameter.MAGNETIC_SUSCEPTIBILITY) {
+            throw new IllegalArgumentException(susceptibility + " is no susceptibility to a static field");
+        }
+    }
+
+    /**
+     * A fit of the electric susceptibility.
+     *
+     * @param phasePerSusceptibility factor c (rad per unit of &chi; and q), not zero
+     * @param lowest                 lowest susceptibility searched
+     * @param highest                highest susceptibility searched, &gt; lowest
+     */
+    public DeflectionFit(double phasePerSusceptibility, double lowest, double highest) {
+        this(phasePerSusceptibility, lowest, highest, Parameter.ELECTRIC_SUSCEPTIBILITY);
     }
 
     /**
      * A fit with the unwrapped phases it rests on.
      *
-     * @param outcome   susceptibility ({@link Parameter#ELECTRIC_SUSCEPTIBILITY}) and phase without field, or a refusal
+     * @param outcome   susceptibility of the sort asked for and phase without field, or a refusal
      * @param unwrapped phases on the branch that was used (rad), one per point
      */
     public record Result(FitOutcome outcome, double[] unwrapped) {}
@@ -129,15 +146,13 @@ public record DeflectionFit(double phasePerSusceptibility, double lowest, double
 
     private Optional<PropertyFit> line(MeasuredCurve unwrapped) {
         return LineFit.fit(
-                unwrapped,
-                q -> phasePerSusceptibility * q,
-                List.of(Parameter.ELECTRIC_SUSCEPTIBILITY, Parameter.UNDISTURBED_PHASE));
+                unwrapped, q -> phasePerSusceptibility * q, List.of(susceptibility, Parameter.UNDISTURBED_PHASE));
     }
 
     private List<FitWarning> warnings(PropertyFit fit, MeasuredCurve data, List<Candidate> candidates) {
         List<FitWarning> warnings = new ArrayList<>();
         double value = fit.values()[0];
-        double apart = 5.0 * fit.estimate(Parameter.ELECTRIC_SUSCEPTIBILITY).standardUncertainty();
+        double apart = 5.0 * fit.estimate(susceptibility).standardUncertainty();
         for (Candidate other : candidates) {
             double excess = other.chiSquare - fit.chiSquare();
             if (excess < NEARBY && Math.abs(other.susceptibility - value) > apart) {

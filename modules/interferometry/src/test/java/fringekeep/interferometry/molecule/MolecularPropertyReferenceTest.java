@@ -229,6 +229,12 @@ class MolecularPropertyReferenceTest {
         assertThat(offset.standardUncertainty())
                 .isCloseTo(expected.get("sigma_phi0").asDouble(), within(1e-6));
         assertThat(fit.chiSquare()).isCloseTo(expected.get("chi2").asDouble(), within(1e-6));
+        PropertyFit magnetic = new DeflectionFit(factor, 0.0, 300 * unit, Parameter.MAGNETIC_SUSCEPTIBILITY)
+                .fit(new MeasuredCurve(squares, values, uncertainties))
+                .outcome()
+                .orThrow();
+        assertThat(magnetic.parameters()).contains(Parameter.MAGNETIC_SUSCEPTIBILITY);
+        assertThat(magnetic.estimate(Parameter.MAGNETIC_SUSCEPTIBILITY)).isEqualTo(chi);
         for (int k = 0; k < values.length; k++) {
             assertThat(result.unwrapped()[k])
                     .isCloseTo(expected.get("unwrapped_phase").get(k).asDouble(), within(1e-9));
