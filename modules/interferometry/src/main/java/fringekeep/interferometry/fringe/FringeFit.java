@@ -3,13 +3,14 @@ package fringekeep.interferometry.fringe;
 import fringekeep.interferometry.statistics.AmplitudeLimits;
 import fringekeep.interferometry.statistics.Estimate;
 import fringekeep.interferometry.statistics.Interval;
+import fringekeep.interferometry.statistics.PoissonDeviance;
 import fringekeep.interferometry.statistics.SymmetricMatrix;
 import java.util.List;
 import java.util.Optional;
 
 /**
- * A fitted scan: mean, cosine and sine of the signal with their covariance, and what is derived from them. Rates are
- * per unit exposure. Immutable.
+ * A fitted scan: mean, cosine and sine of the signal with their covariance, and what is derived from them, worked out
+ * when asked for. Rates are per unit exposure. Immutable.
  */
 public final class FringeFit implements FringeOutcome {
     private final FringeData data;
@@ -19,8 +20,6 @@ public final class FringeFit implements FringeOutcome {
     private final double[] covariance;
     private final Inside inside;
     private final int degreesOfFreedom;
-    private final double pearson;
-    private final double deviance;
     private final List<Finding> findings;
 
     /** What a reader of the fit should know. */
@@ -39,16 +38,66 @@ public final class FringeFit implements FringeOutcome {
     }
 
     /**
-     * What the derived quantities need of the fit's workings: the parameters as fitted, mean, cosine and sine with the
-     * covariance before and after background and dispersion, expected and observed counts of all rows.
+     * What the derived quantities need of the fit's workings: the parameters as fitted, their packed covariance before and
+     * after background and dispersion, expected and observed counts of all rows, the detector's variance over the Poisson
+     * one at each (empty: 1 everywhere), and how many rows are points of the scan.
      */
     record Inside(
             double[] theta,
-            HarmonicEstimate plain,
-            HarmonicEstimate widened,
+            double[] plainCovariance,
+            double[] widenedCovariance,
             double[] expected,
             double[] observed,
-            int points) {}
+            double[] varianceRatios,
+            int points) {
+        /** Mean, cosine and sine with the covariance before background and dispersion. */
+        HarmonicEstimate plain() {
+            return harmonic(plainCovariance);
+        }
+
+        /** Mean, cosine and sine with the covariance after background and dispersion. */
+        HarmonicEstimate widened() {
+            return harmonic(widenedCovariance);
+        }
+
+        private HarmonicEstimate harmonic(double[] covariance) {
+            return new HarmonicEstimate(theta[0], theta[1], theta[2], java.util.Arrays.copyOf(covariance, 6));
+        }
+
+        /** The same with the covariance times the dispersion where that exceeds 1. */
+        Inside dispersed(Estimator estimator) {
+            int degrees = observed.length - theta.length;
+            double dispersion = degrees > 0 ? pearson(estimator) / degrees : 1;
+            double[] widened = widenedCovariance.clone();
+            if (dispersion > 1) {
+                FringeFitAssembly.scale(widened, dispersion);
+            }
+            return new Inside(theta, plainCovariance, widened, expected, observed, varianceRatios, points);
+        }
+
+        /** &chi;&sup2; with the variances the estimator takes for true. */
+        double pearson(Estimator estimator) {
+            double sum = 0;
+            for (int row = 0; row < observed.length; row++) {
+                double residual = observed[row] - expected[row];
+                double ratio = varianceRatios.length == 0 ? 1 : varianceRatios[row];
+                double variance =
+                        estimator == Estimator.WEIGHTED_BY_COUNTS ? Math.max(observed[row], 1) : expected[row] * ratio;
+                if (residual != 0) {
+                    sum += variance > 0 ? residual * residual / variance : 0;
+                }
+            }
+            return sum;
+        }
+
+        double deviance() {
+            double sum = 0;
+            for (int row = 0; row < observed.length; row++) {
+                sum += PoissonDeviance.term(observed[row], Math.max(expected[row], 0));
+            }
+            return sum;
+        }
+    }
 
     FringeFit(
             FringeData data,
@@ -58,8 +107,6 @@ public final class FringeFit implements FringeOutcome {
             double[] covariance,
             Inside inside,
             int degreesOfFreedom,
-            double pearson,
-            double deviance,
             List<Finding> findings) {
         this.data = data;
         this.options = options;
@@ -68,8 +115,6 @@ public final class FringeFit implements FringeOutcome {
         this.covariance = covariance;
         this.inside = inside;
         this.degreesOfFreedom = degreesOfFreedom;
-        this.pearson = pearson;
-        this.deviance = deviance;
         this.findings = findings;
     }
 
@@ -258,7 +303,7 @@ public final class FringeFit implements FringeOutcome {
      * @return the deviance
      */
     public double deviance() {
-        return deviance;
+        return inside.deviance();
     }
 
     /**
@@ -268,7 +313,7 @@ public final class FringeFit implements FringeOutcome {
      * @return &chi;&sup2;
      */
     public double chiSquare() {
-        return pearson;
+        return inside.pearson(options.estimator());
     }
 
     /**

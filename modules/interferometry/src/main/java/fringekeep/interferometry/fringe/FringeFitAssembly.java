@@ -1,6 +1,5 @@
 package fringekeep.interferometry.fringe;
 
-import fringekeep.interferometry.statistics.PoissonDeviance;
 import fringekeep.interferometry.statistics.SymmetricMatrix;
 import java.util.ArrayList;
 import java.util.List;
@@ -8,6 +7,10 @@ import org.jspecify.annotations.Nullable;
 
 /** From a found minimum to the published fit: covariance, change of variables, goodness of fit. */
 final class FringeFitAssembly {
+    private static final List<String> PLAIN_NAMES = List.of("mean", "cosine", "sine");
+    private static final List<String> FREE_NAMES = List.of("mean", "cosine", "sine", "period");
+    private static final double[] NO_RATIOS = new double[0];
+
     private final FringeData data;
     private final FringeOptions options;
     private final FringeModel model;
@@ -46,15 +49,18 @@ final class FringeFitAssembly {
         }
         double[] plain = covariance.clone();
         addBackground(covariance, bread);
-        int degrees = model.rows - p;
-        double pearson = pearson();
-        double dispersion = degrees > 0 ? pearson / degrees : 1;
-        if (options.scaleByDispersion() && dispersion > 1) {
-            for (int k = 0; k < covariance.length; k++) {
-                covariance[k] *= dispersion;
-            }
+        FringeFit.Inside inside = new FringeFit.Inside(
+                theta.clone(),
+                plain,
+                covariance,
+                model.expected.clone(),
+                model.observed.clone(),
+                model.varianceRatios.clone(),
+                model.points);
+        if (options.scaleByDispersion()) {
+            inside = inside.dispersed(options.estimator());
         }
-        return published(covariance, plain, degrees, pearson);
+        return published(inside.widenedCovariance(), inside);
     }
 
     private static FringeFailure notDetermined() {
@@ -136,10 +142,14 @@ final class FringeFitAssembly {
             sum += estimating[row] * residual * residual;
         }
         double[] covariance = bread.clone();
-        for (int k = 0; k < covariance.length; k++) {
-            covariance[k] *= sum / (model.rows - p);
-        }
+        scale(covariance, sum / (model.rows - p));
         return covariance;
+    }
+
+    static void scale(double[] matrix, double factor) {
+        for (int k = 0; k < matrix.length; k++) {
+            matrix[k] *= factor;
+        }
     }
 
     /** Inverse of the negative second derivatives of the log likelihood; by differences of the score unless linear. */
@@ -204,87 +214,125 @@ final class FringeFitAssembly {
         }
     }
 
-    private double pearson() {
-        double sum = 0;
-        for (int row = 0; row < model.rows; row++) {
-            double residual = model.observed[row] - model.expected[row];
-            double variance = options.estimator() == Estimator.WEIGHTED_BY_COUNTS
-                    ? Math.max(model.observed[row], 1)
-                    : model.expected[row] * model.varianceRatios[row];
-            if (residual != 0) {
-                sum += variance > 0 ? residual * residual / variance : 0;
-            }
-        }
-        return sum;
-    }
-
-    private double deviance() {
-        double sum = 0;
-        for (int row = 0; row < model.rows; row++) {
-            sum += PoissonDeviance.term(model.observed[row], Math.max(model.expected[row], 0));
-        }
-        return sum;
-    }
-
-    private FringeFit published(double[] covariance, double[] plain, int degrees, double pearson) {
+    private FringeFit published(double[] covariance, FringeFit.Inside inside) {
         double[] values = theta.clone();
         double[] changed = covariance;
         if (model.frequencyAt >= 0) {
-            double[][] change = toOrigin(values);
-            changed = SymmetricMatrix.transform(change, covariance);
+            changed = SymmetricMatrix.transform(toOrigin(values), covariance);
         }
+        return published(data, options, model.names(), values, changed, inside, onEdge);
+    }
+
+    private static FringeFit published(
+            FringeData data,
+            FringeOptions options,
+            List<String> names,
+            double[] values,
+            double[] covariance,
+            FringeFit.Inside inside,
+            boolean onEdge) {
+        int degrees = inside.observed().length - values.length;
         for (int j = 0; j < values.length; j++) {
             values[j] += 0.0;
         }
-        List<FringeFit.Finding> findings = new ArrayList<>();
-        if (onEdge) {
-            findings.add(FringeFit.Finding.ON_EDGE);
-        }
-        if (!(values[0] > 0)) {
-            findings.add(FringeFit.Finding.NO_SIGNAL);
-        } else if (values[1] * values[1] + values[2] * values[2] > values[0] * values[0]) {
-            findings.add(FringeFit.Finding.ABOVE_ONE);
-        }
-        if (degrees == 0) {
-            findings.add(FringeFit.Finding.NO_DEGREE_OF_FREEDOM);
-        }
         return new FringeFit(
-                data,
-                options,
-                model.names(),
-                values,
-                changed,
-                new FringeFit.Inside(
-                        theta.clone(),
-                        new HarmonicEstimate(theta[0], theta[1], theta[2], java.util.Arrays.copyOf(plain, 6)),
-                        new HarmonicEstimate(theta[0], theta[1], theta[2], java.util.Arrays.copyOf(covariance, 6)),
-                        model.expected.clone(),
-                        model.observed.clone(),
-                        model.points),
-                degrees,
-                pearson,
-                deviance(),
-                List.copyOf(findings));
+                data, options, names, values, covariance, inside, degrees, findings(values, onEdge, degrees));
+    }
+
+    private static List<FringeFit.Finding> findings(double[] values, boolean onEdge, int degrees) {
+        boolean noSignal = !(values[0] > 0);
+        boolean aboveOne = !noSignal && values[1] * values[1] + values[2] * values[2] > values[0] * values[0];
+        if (!onEdge && !noSignal && !aboveOne && degrees > 0) {
+            return List.of();
+        }
+        List<FringeFit.Finding> findings = new ArrayList<>();
+        add(findings, onEdge, FringeFit.Finding.ON_EDGE);
+        add(findings, noSignal, FringeFit.Finding.NO_SIGNAL);
+        add(findings, aboveOne, FringeFit.Finding.ABOVE_ONE);
+        add(findings, degrees == 0, FringeFit.Finding.NO_DEGREE_OF_FREEDOM);
+        return List.copyOf(findings);
+    }
+
+    private static void add(List<FringeFit.Finding> findings, boolean holds, FringeFit.Finding finding) {
+        if (holds) {
+            findings.add(finding);
+        }
+    }
+
+    /** The fit of a scan without background and dead time at a fixed period, from its minimum; keeps the arrays. */
+    static FringeFit plain(
+            FringeData data,
+            FringeOptions options,
+            double[] theta,
+            double[] covariance,
+            double[] expected,
+            double[] observed) {
+        FringeFit.Inside inside = plainInside(options, theta, covariance, expected, observed);
+        return published(data, options, PLAIN_NAMES, theta.clone(), inside.widenedCovariance(), inside, false);
+    }
+
+    private static FringeFit.Inside plainInside(
+            FringeOptions options, double[] theta, double[] covariance, double[] expected, double[] observed) {
+        FringeFit.Inside inside =
+                new FringeFit.Inside(theta, covariance, covariance, expected, observed, NO_RATIOS, observed.length);
+        return options.scaleByDispersion() ? inside.dispersed(options.estimator()) : inside;
+    }
+
+    /** The fit of such a scan with the period free, its phase counted from the centre; keeps the arrays. */
+    static FringeFit free(
+            FringeData data,
+            FringeOptions options,
+            double[] theta,
+            double[] covariance,
+            double[] expected,
+            double[] observed,
+            double centre) {
+        FringeFit.Inside inside = plainInside(options, theta, covariance, expected, observed);
+        double[] values = theta.clone();
+        double[][] change = identity(values.length);
+        double middle = centre / options.period();
+        double frequency = 1 + theta[3];
+        rotate(theta, values, change, 1, 3, middle * frequency, 2 * Math.PI * middle);
+        toPeriod(values, change, 3, options.period(), frequency);
+        double[] changed = SymmetricMatrix.transform(change, inside.widenedCovariance());
+        return published(data, options, FREE_NAMES, values, changed, inside, false);
     }
 
     /** Turns cosine and sine from the middle of the scan to position 0 and the frequency to a period; returns the slopes. */
     private double[][] toOrigin(double[] values) {
-        double[][] change = new double[p][p];
-        for (int j = 0; j < p; j++) {
-            change[j][j] = 1;
-        }
-        double frequency = 1 + theta[model.frequencyAt];
+        double[][] change = identity(p);
+        int at = model.frequencyAt;
+        double frequency = 1 + theta[at];
         double middle = model.centre / options.period();
-        rotate(values, change, 1, middle * frequency, 2 * Math.PI * middle);
+        rotate(theta, values, change, 1, at, middle * frequency, 2 * Math.PI * middle);
         if (model.harmonicAt >= 0) {
-            rotate(values, change, model.harmonicAt, 2 * middle * frequency, 4 * Math.PI * middle);
+            rotate(theta, values, change, model.harmonicAt, at, 2 * middle * frequency, 4 * Math.PI * middle);
         }
-        values[model.frequencyAt] = options.period() / frequency;
-        change[model.frequencyAt][model.frequencyAt] = -options.period() / (frequency * frequency);
+        toPeriod(values, change, at, options.period(), frequency);
         return change;
     }
 
-    private void rotate(double[] values, double[][] change, int at, double turns, double angleByFrequency) {
+    private static double[][] identity(int p) {
+        double[][] identity = new double[p][p];
+        for (int j = 0; j < p; j++) {
+            identity[j][j] = 1;
+        }
+        return identity;
+    }
+
+    private static void toPeriod(double[] values, double[][] change, int at, double start, double frequency) {
+        values[at] = start / frequency;
+        change[at][at] = -start / (frequency * frequency);
+    }
+
+    private static void rotate(
+            double[] theta,
+            double[] values,
+            double[][] change,
+            int at,
+            int frequencyAt,
+            double turns,
+            double angleByFrequency) {
         double c = Turns.cos(turns);
         double s = Turns.sin(turns);
         double a = theta[at];
@@ -295,7 +343,7 @@ final class FringeFitAssembly {
         change[at][at + 1] = -s;
         change[at + 1][at] = s;
         change[at + 1][at + 1] = c;
-        change[at][model.frequencyAt] = -values[at + 1] * angleByFrequency;
-        change[at + 1][model.frequencyAt] = values[at] * angleByFrequency;
+        change[at][frequencyAt] = -values[at + 1] * angleByFrequency;
+        change[at + 1][frequencyAt] = values[at] * angleByFrequency;
     }
 }

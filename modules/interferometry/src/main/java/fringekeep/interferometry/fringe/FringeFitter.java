@@ -1,6 +1,7 @@
 package fringekeep.interferometry.fringe;
 
 import fringekeep.interferometry.statistics.SymmetricMatrix;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Fits one scan.
@@ -9,7 +10,8 @@ import fringekeep.interferometry.statistics.SymmetricMatrix;
  * + a<sub>2</sub> cos 2&theta; + b<sub>2</sub> sin 2&theta;] + B}, &theta; = 2 &pi; x<sub>i</sub> / d, m the monitor over its
  * mean, D the drift of {@link FringeOptions}; then the detector's dead time. All rates are per unit exposure.
  *
- * <p>The normal equations are solved in full, so the scan may cover any range of positions. Stateless and thread-safe.
+ * <p>The normal equations are solved in full, so the scan may cover any range of positions. Thread-safe; cosines and sines
+ * of the grid fitted last are kept for the next scan over the same grid.
  */
 public final class FringeFitter {
     /** Share of the mean expected count below which a point with the weighted estimator keeps the weight of half a count. */
@@ -27,6 +29,19 @@ public final class FringeFitter {
      * @return the fit, or the reason why there is none
      */
     public static FringeOutcome fit(FringeData data, FringeOptions options) {
+        FringeFit quick = PlainSquares.covers(data, options) ? quick(data, options) : null;
+        return quick == null ? general(data, options) : quick;
+    }
+
+    private static @Nullable FringeFit quick(FringeData data, FringeOptions options) {
+        if (options.estimator() != Estimator.UNWEIGHTED) {
+            return null;
+        }
+        return options.periodFree() ? FreeSquares.fit(data, options) : PlainSquares.fit(data, options);
+    }
+
+    /** The way for every question, and the judge of the short ones: they must give the same bits. */
+    static FringeOutcome general(FringeData data, FringeOptions options) {
         FringeModel model = new FringeModel(data, options);
         FringeFailure refusal = refusal(data, options, model);
         if (refusal != null) {
@@ -53,8 +68,7 @@ public final class FringeFitter {
         return all;
     }
 
-    private static @org.jspecify.annotations.Nullable FringeFailure refusal(
-            FringeData data, FringeOptions options, FringeModel model) {
+    private static @Nullable FringeFailure refusal(FringeData data, FringeOptions options, FringeModel model) {
         boolean needsDark = options.background().sort() == Background.Sort.ESTIMATED
                 || options.background().sort() == Background.Sort.JOINT;
         if (needsDark && data.darkCounts.length == 0) {
@@ -85,7 +99,7 @@ public final class FringeFitter {
         return saturated(data);
     }
 
-    private static @org.jspecify.annotations.Nullable FringeFailure saturated(FringeData data) {
+    private static @Nullable FringeFailure saturated(FringeData data) {
         for (int i = 0; i < data.counts.length; i++) {
             double live = data.exposures[i] * data.secondsPerExposure;
             double most =
@@ -116,7 +130,7 @@ public final class FringeFitter {
     }
 
     /** Half a period more or less over the scan is as far as a local fit may carry the period. */
-    private static @org.jspecify.annotations.Nullable FringeFailure lostPeriod(FringeModel model, double[] theta) {
+    private static @Nullable FringeFailure lostPeriod(FringeModel model, double[] theta) {
         if (model.frequencyAt < 0) {
             return null;
         }
@@ -241,7 +255,7 @@ public final class FringeFitter {
     }
 
     /** Packed covariance of the free parameters before any change of variables, or null if not determined. */
-    static double @org.jspecify.annotations.Nullable [] inverseOf(FringeModel model, double[] weights, int parameters) {
+    static double @Nullable [] inverseOf(FringeModel model, double[] weights, int parameters) {
         double[] matrix = weighted(model, weights, parameters);
         return SymmetricMatrix.factor(matrix, parameters, FringeSolver.SMALLEST_PIVOT)
                 ? SymmetricMatrix.inverse(matrix, parameters)

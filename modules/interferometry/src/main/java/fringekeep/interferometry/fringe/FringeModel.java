@@ -81,7 +81,7 @@ final class FringeModel {
         setBackground(data);
     }
 
-    private static int[] used(FringeData data) {
+    static int[] used(FringeData data) {
         int count = 0;
         for (boolean masked : data.masked) {
             count += masked ? 0 : 1;
@@ -96,7 +96,7 @@ final class FringeModel {
         return used;
     }
 
-    private static double middle(FringeData data, int[] used) {
+    static double middle(FringeData data, int[] used) {
         double sum = 0;
         for (int i : used) {
             sum += data.positions[i];
@@ -191,13 +191,7 @@ final class FringeModel {
 
     /** The range of the points in periods. */
     double span() {
-        double low = Double.POSITIVE_INFINITY;
-        double high = Double.NEGATIVE_INFINITY;
-        for (double turn : turns) {
-            low = Math.min(low, turn);
-            high = Math.max(high, turn);
-        }
-        return high - low;
+        return FringeGrid.span(turns);
     }
 
     /** Fills expected counts and slopes; false where the model has no meaning. */

@@ -13,8 +13,8 @@ import org.jspecify.annotations.Nullable;
  */
 final class FringeSolver {
     static final double SMALLEST_PIVOT = 1e-11;
-    private static final double STEP_TOLERANCE = 1e-11;
-    private static final double ROUNDING = 1e-14;
+    static final double STEP_TOLERANCE = 1e-11;
+    static final double ROUNDING = 1e-14;
     private static final int MOST_STEPS = 200;
     private static final double BOUND_PENALTY = 200;
 
