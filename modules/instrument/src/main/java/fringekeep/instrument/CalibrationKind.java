@@ -15,6 +15,7 @@ import fringekeep.archive.listing.Row;
 import fringekeep.archive.problem.Problem;
 import fringekeep.archive.record.KindName;
 import fringekeep.archive.record.PartName;
+import java.time.Instant;
 import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.List;
@@ -88,6 +89,18 @@ public final class CalibrationKind implements RecordKind {
     @Override
     public List<Problem> examine(Parts parts, Inputs inputs) {
         return CalibrationRules.examine(parts);
+    }
+
+    /** A calibration that follows another holds from the very instant from which it is valid (record format 1, section 6). */
+    @Override
+    public List<Problem> examineContinuation(Parts parts, Instant from) {
+        Optional<Instant> valid = parts.get(PartName.CONTENT)
+                .flatMap(content -> content.object("valid"))
+                .flatMap(object -> CalibrationReader.instant(object, "from"));
+        return valid.isEmpty() || valid.get().equals(from)
+                ? List.of()
+                : List.of(Trouble.at(
+                        "valid-from", "/content/valid/from", valid.get().toString(), from.toString()));
     }
 
     @Override

@@ -1,6 +1,7 @@
 package fringekeep.instrument;
 
 import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.catchThrowableOfType;
 
 import fringekeep.archive.Archive;
 import fringekeep.archive.Archives;
@@ -8,8 +9,12 @@ import fringekeep.archive.Circumstances;
 import fringekeep.archive.NewRecord;
 import fringekeep.archive.Person;
 import fringekeep.archive.json.JsonObject;
+import fringekeep.archive.judgement.JudgementKind;
 import fringekeep.archive.kind.Kinds;
+import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
+import fringekeep.archive.problem.Work;
+import fringekeep.archive.record.AboutReference;
 import fringekeep.archive.record.After;
 import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.KindName;
@@ -39,7 +44,7 @@ class CurrentCalibrationsTest {
         archive = Archives.found(
                 folder.resolve("archive"),
                 new Archives.Founding("demo lab", "06:00", "UTC", true, List.of(person), Optional.empty()),
-                new Kinds(List.of(new CalibrationKind())),
+                new Kinds(List.of(new CalibrationKind(), new JudgementKind())),
                 Circumstances.real("1.0.0"));
     }
 
@@ -113,5 +118,100 @@ class CurrentCalibrationsTest {
                 .containsExactly(oven);
         assertThat(CurrentCalibrations.at(archive, at, "temperature-scale", Optional.of("valve")))
                 .isEmpty();
+    }
+
+    private static Hash judge(Archive in, String verdict, Map<String, Hash> about) throws ProblemException {
+        String reason = verdict.equals("preferred") ? "better-calibration" : "misread";
+        return in.record(new NewRecord(
+                        new KindName("judgement"),
+                        List.of(),
+                        about.entrySet().stream()
+                                .map(each ->
+                                        new AboutReference(each.getKey(), each.getValue(), AboutReference.Reach.RECORD))
+                                .toList(),
+                        Map.of(
+                                PartName.CONTENT,
+                                JsonObject.EMPTY.with("verdict", verdict).with("reason", reason)),
+                        List.of(),
+                        Optional.empty(),
+                        Optional.empty(),
+                        Optional.of(PERSON)))
+                .fingerprint();
+    }
+
+    @Test
+    void aWithdrawnOneHoldsNoLongerAndHidesWhatItFollowed() throws ProblemException {
+        String waist = OPEN_ENDED.replace("power-scale", "period-scale");
+        Hash first = record(waist);
+        Hash second = record(
+                waist.replace("0.98", "0.97").replace("2031-09-01T06:00:00Z", CHANGE.toString()),
+                Optional.empty(),
+                Optional.of(new After(first, CHANGE)));
+
+        judge(archive, "withdrawn", Map.of("target", second));
+
+        assertThat(at("period-scale", "2031-10-21T09:59:59Z")).containsExactly(first);
+        assertThat(at("period-scale", "2031-10-21T10:00:00Z")).isEmpty();
+    }
+
+    @Test
+    void oneThatFollowsIsValidFromTheVeryInstant() throws ProblemException {
+        Hash first = record(OPEN_ENDED.replace("power-scale", "velocity-scale"));
+        ProblemException thrown = catchThrowableOfType(
+                ProblemException.class,
+                () -> record(
+                        OPEN_ENDED.replace("power-scale", "velocity-scale"),
+                        Optional.empty(),
+                        Optional.of(new After(first, CHANGE))));
+
+        assertThat(thrown.problems()).extracting(Problem::code).containsExactly("instrument.valid-from");
+        assertThat(thrown.problems()).extracting(Problem::where).containsExactly("/content/valid/from");
+        assertThat(thrown.problems().get(0).mend()).isNotBlank();
+    }
+
+    @Test
+    void twoCorrectionsOfOneAreNamedUntilOneIsPreferred(@TempDir Path folder) throws Exception {
+        String target = OPEN_ENDED.replace("power-scale", "position-scale");
+        try (Archive here = founded(folder.resolve("here"));
+                Archive there = founded(folder.resolve("there"))) {
+            Hash wrong = record(here, target, Optional.empty());
+            here.copyTo(folder.resolve("copy-1"), Work.QUIET);
+            there.receive(folder.resolve("copy-1"), false, Work.QUIET);
+            Hash ours = record(here, target.replace("0.98", "0.97"), Optional.of(wrong));
+            Hash theirs = record(there, target.replace("0.98", "0.96"), Optional.of(wrong));
+            here.copyTo(folder.resolve("copy-2"), Work.QUIET);
+            there.receive(folder.resolve("copy-2"), false, Work.QUIET);
+            Instant at = Instant.parse("2031-10-01T00:00:00Z");
+
+            ProblemException thrown =
+                    catchThrowableOfType(ProblemException.class, () -> CurrentCalibrations.at(there, at));
+            assertThat(thrown.problems()).extracting(Problem::code).containsExactly("instrument.calibration-disputed");
+            assertThat(thrown.problems().get(0).what()).contains(there.label(theirs), there.label(ours));
+
+            judge(there, "preferred", Map.of("chosen", theirs, "over", ours));
+            assertThat(CurrentCalibrations.at(there, at)).containsExactly(theirs);
+        }
+    }
+
+    private static Archive founded(Path folder) throws ProblemException {
+        Person person = new Person(PERSON, Optional.of("Ottla Vireen"), Optional.empty(), Optional.empty());
+        return Archives.found(
+                folder,
+                new Archives.Founding("demo lab", "06:00", "UTC", true, List.of(person), Optional.empty()),
+                new Kinds(List.of(new CalibrationKind(), new JudgementKind())),
+                Circumstances.real("1.0.0"));
+    }
+
+    private static Hash record(Archive in, String content, Optional<Hash> corrects) throws ProblemException {
+        return in.record(new NewRecord(
+                        new KindName("calibration"),
+                        List.of(),
+                        List.of(),
+                        Map.<PartName, JsonObject>of(PartName.CONTENT, Records.json(content)),
+                        List.of(),
+                        corrects,
+                        Optional.empty(),
+                        Optional.of(PERSON)))
+                .fingerprint();
     }
 }
