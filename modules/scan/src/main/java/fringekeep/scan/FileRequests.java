@@ -14,6 +14,7 @@ import fringekeep.archive.record.PartName;
 import fringekeep.archive.record.PersonId;
 import fringekeep.scan.internal.problem.ScanProblems;
 import fringekeep.scan.internal.reading.FileReader;
+import fringekeep.scan.internal.reading.Lines;
 import fringekeep.scan.internal.reading.Profile;
 import fringekeep.scan.internal.reading.Reading;
 import java.io.IOException;
@@ -82,6 +83,12 @@ final class FileRequests {
     /** All bytes of a file. */
     static byte[] bytes(Path file) throws ProblemException {
         try {
+            long length = Files.size(file);
+            if (length > Lines.LARGEST) {
+                // asked before reading: what is no text file may be larger than the memory
+                throw new ProblemException(
+                        ScanProblems.of("scan.file-too-large", file.toString(), length, Lines.LARGEST));
+            }
             return Files.readAllBytes(file);
         } catch (IOException e) {
             throw new ProblemException(

@@ -52,6 +52,27 @@ public final class PlaceOffers {
      */
     public record Step(String words, Optional<Purpose> purpose) {}
 
+    /**
+     * What the placement of one scan says beside the records it shares with others.
+     *
+     * @param purpose purpose
+     * @param step step of the series
+     * @param series series, as it stands now
+     */
+    public record Placed(Purpose purpose, OptionalInt step, Optional<Hash> series) {}
+
+    /** How a scan is placed now; empty when it is not, or in dispute. */
+    public Optional<Placed> placed(Hash scan) {
+        return placement(scan)
+                .map(placement -> new Placed(
+                        placement.content().text("purpose").flatMap(Purpose::of).orElse(Purpose.SIGNAL),
+                        placement.content().integer("step").isPresent()
+                                ? OptionalInt.of((int)
+                                        placement.content().integer("step").getAsLong())
+                                : OptionalInt.empty(),
+                        now(placement, "series")));
+    }
+
     /** Where the offered values come from. */
     public enum Whence {
         /** The scan has them itself: it is placed. */

@@ -42,7 +42,8 @@ public final class TryFiles {
      *
      * @param file the file
      * @param bytes its length; 0 when it cannot be read
-     * @param profile the profile it is read by: the one asked for, else the likeliest
+     * @param profile the profile it is read by: the one asked for, else the likeliest; where none reads it, the one that gets
+     *     farthest, if any tells a line
      * @param fitting all profiles that read it, the likeliest first; only filled where none was asked for
      * @param sections its sections, one scan each
      * @param rows rows of all sections
@@ -50,7 +51,8 @@ public final class TryFiles {
      * @param findings codes of what was noticed, each once
      * @param known scans that this very reading gave before
      * @param otherwise current scans of the same bytes that another profile gave
-     * @param problems why it would be refused; empty when it would be taken in
+     * @param problems why it would be refused; empty when it would be taken in. Where no profile reads it: that, then what
+     *     stops the one that gets farthest
      */
     public record Tried(
             Path file,
@@ -117,15 +119,52 @@ public final class TryFiles {
         List<Hash> fitting = asked.isPresent() ? List.of() : fitting(bytes, name(file));
         Optional<Hash> profile = asked.or(() -> fitting.stream().findFirst());
         if (profile.isEmpty()) {
-            Problem none =
-                    ScanProblems.of("scan.no-profile", name(file), profiles().size());
-            return refused(file, bytes.length, asked, fitting, List.of(none));
+            return nearest(file, bytes);
         }
         try {
             return read(file, bytes, profile.get(), fitting);
         } catch (ProblemException e) {
             return refused(file, bytes.length, profile, fitting, e.problems());
         }
+    }
+
+    /** The profile that gets farthest into the file, with what stops it. */
+    private Tried nearest(Path file, byte[] bytes) {
+        List<Hash> profiles = profiles();
+        List<Problem> problems = new ArrayList<>();
+        problems.add(ScanProblems.of("scan.no-profile", name(file), profiles.size()));
+        Optional<Hash> nearest = Optional.empty();
+        List<Problem> stops = List.of();
+        for (Hash profile : profiles) {
+            List<Problem> own = problems(profile, bytes, name(file));
+            if (line(own) > line(stops)) {
+                nearest = Optional.of(profile);
+                stops = own;
+            }
+        }
+        problems.addAll(stops);
+        return refused(file, bytes.length, nearest, List.of(), problems);
+    }
+
+    private List<Problem> problems(Hash profile, byte[] bytes, String name) {
+        try {
+            FileReader reader = reader(profile, bytes, name);
+            for (int section = 0; section < reader.sections(); section++) {
+                reader.read(section);
+            }
+            return List.of();
+        } catch (ProblemException e) {
+            return e.problems();
+        }
+    }
+
+    /** The first line that is in the way; 0 where none is named. */
+    private static int line(List<Problem> problems) {
+        return problems.stream()
+                .flatMap(problem -> FilePlace.of(problem).stream())
+                .mapToInt(FilePlace::line)
+                .findFirst()
+                .orElse(0);
     }
 
     private List<Hash> fitting(byte[] bytes, String name) throws ProblemException {

@@ -99,6 +99,18 @@ class TryFilesTest {
     }
 
     @Test
+    void theProfileThatGetsFarthestTellsWhatStopsIt() throws IOException, ProblemException {
+        lab.enter("reading-profile", Profiles.content(Profiles.TAB));
+        Path bad = file("e.csv", "pos/nm,n\n0,5\n26,12\n52,nine\n");
+
+        TryFiles.Tried tried = new TryFiles(lab.archive).attempt(bad, Optional.empty());
+
+        assertThat(tried.profile()).contains(profile);
+        assertThat(tried.problems()).extracting(Problem::code).containsExactly("scan.no-profile", "scan.not-a-number");
+        assertThat(FilePlace.of(tried.problems().get(1))).contains(new FilePlace(4, 4));
+    }
+
+    @Test
     void onlyPlacesAtTheEndOfWhereAreReadAsPlaces() {
         assertThat(FilePlace.of(new Problem("c", "w", "a, line 7.csv", "m"))).isEmpty();
         assertThat(FilePlace.of(new Problem("c", "w", "a.csv, line 7", "m"))).contains(new FilePlace(7, 1));

@@ -18,7 +18,7 @@ public final class Lines {
     static final int LONGEST = 100_000;
 
     /** Largest text file read (bytes). */
-    static final int LARGEST = 256 << 20;
+    public static final int LARGEST = 256 << 20;
 
     private static final char BYTE_ORDER_MARK = '\uFEFF';
 
