@@ -28,6 +28,7 @@ public final class RuledTable extends JTable {
 
     private final transient List<Col> columns;
     private transient List<List<Cell>> rows = List.of();
+    private String whenEmpty = "";
 
     /**
      * A column.
@@ -99,6 +100,23 @@ public final class RuledTable extends JTable {
         revalidate();
     }
 
+    /** Says what would stand here, in the first row, while there is none. */
+    public void whenEmpty(String words) {
+        whenEmpty = words;
+        repaint();
+    }
+
+    @Override
+    protected void paintComponent(Graphics graphics) {
+        super.paintComponent(graphics);
+        if (rows.isEmpty() && !whenEmpty.isEmpty()) {
+            try (Pen pen = new Pen(graphics)) {
+                pen.fitted(whenEmpty, Type.BODY, Ink.INK2, MARGIN + 6.0, 15, getWidth() - 2.0 * MARGIN);
+                pen.level(Ink.HAIR, MARGIN, getWidth() - (double) MARGIN, 21);
+            }
+        }
+    }
+
     /** Shows one row anew. */
     public void show(int row, List<Cell> cells) {
         rows.set(row, List.copyOf(cells));
@@ -109,6 +127,7 @@ public final class RuledTable extends JTable {
     /** The table below its heads, scrolled where it is longer than its room. */
     public JScrollPane inScroll() {
         JScrollPane scroll = new JScrollPane(this);
+        scroll.setColumnHeaderView(getTableHeader());
         scroll.setHorizontalScrollBarPolicy(ScrollPaneConstants.HORIZONTAL_SCROLLBAR_NEVER);
         scroll.setBorder(BorderFactory.createEmptyBorder());
         scroll.setOpaque(false);
@@ -123,7 +142,10 @@ public final class RuledTable extends JTable {
 
     @Override
     public void doLayout() {
-        int fixed = columns.stream().filter(col -> !col.grows()).mapToInt(Col::width).sum();
+        int fixed = columns.stream()
+                .filter(col -> !col.grows())
+                .mapToInt(Col::width)
+                .sum();
         for (int i = 0; i < columns.size(); i++) {
             Col col = columns.get(i);
             int width = col.grows() ? Math.max(col.width(), getWidth() - fixed) : col.width();
@@ -202,7 +224,8 @@ public final class RuledTable extends JTable {
                 Col col = columns.get(column);
                 boolean last = column == columns.size() - 1;
                 pen.level(Ink.RULE, column == 0 ? MARGIN : 0, last ? getWidth() - MARGIN : getWidth(), 23);
-                double x = col.right() ? right(column, getWidth()) - Lettering.width(col.head(), Type.HEAD) : left(column);
+                double x =
+                        col.right() ? right(column, getWidth()) - Lettering.width(col.head(), Type.HEAD) : left(column);
                 pen.text(col.head(), Type.HEAD, Ink.INK2, x, 16);
             }
         }
