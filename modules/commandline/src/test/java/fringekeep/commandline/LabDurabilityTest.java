@@ -10,6 +10,7 @@ import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.PartName;
 import fringekeep.testsupport.OtherProgram;
 import java.io.ByteArrayOutputStream;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.util.HashSet;
 import java.util.List;
@@ -49,7 +50,7 @@ class LabDurabilityTest {
                 "--from",
                 samples.toString(),
                 place.toString());
-        assertThat(code).as(words.toString()).isZero();
+        assertThat(code).as(words.toString(StandardCharsets.UTF_8)).isZero();
     }
 
     @Test
