@@ -102,8 +102,7 @@ public final class CopyContents {
         try {
             entry = EntryCodec.read(bytes);
         } catch (ProblemException e) {
-            throw new ProblemException(
-                    e.problems().get(0).at(where + e.problems().get(0).where()));
+            throw broken(e, where);
         }
         boolean follows = entry.n() == entries.size() + 1L
                 && entry.previous().equals(previous)
@@ -131,7 +130,16 @@ public final class CopyContents {
         return List.of();
     }
 
+    private Head head(Hash fingerprint, String where) throws ProblemException {
+        try {
+            return HeadCodec.read(source.head(fingerprint).orElseThrow());
+        } catch (ProblemException e) {
+            throw broken(e, where);
+        }
+    }
+
     private List<Hash> record(Hash fingerprint, Lines records) throws ProblemException {
+        String where = records.place();
         if (!records.take(fingerprint)) {
             throw wrong(
                     "copy.head-missing",
@@ -139,7 +147,7 @@ public final class CopyContents {
                     records.place(),
                     "Take the file from another copy.");
         }
-        Head head = HeadCodec.read(source.head(fingerprint).orElseThrow());
+        Head head = head(fingerprint, where);
         SortedMap<String, Hash> parts = new TreeMap<>(head.parts());
         parts.putAll(head.sealed());
         List<Hash> brought = new ArrayList<>();
@@ -163,10 +171,21 @@ public final class CopyContents {
         if (entries.size() != hint.n() || !previous.equals(Optional.of(hint.sha256()))) {
             throw wrong(
                     "copy.end",
-                    "The journal does not end with entry " + hint.n() + " as archive.json says.",
-                    folder.hint(),
-                    "Take the journal from another copy.");
+                    "The journal does not end with the entry " + hint.n() + " that archive.json names.",
+                    folder.journal(CopyFolder.fileOf(hint.n())) + " or " + folder.hint(),
+                    "Take both from another copy.");
         }
+    }
+
+    /** What is wrong with stored bytes, with the place in the copy and a mend that fits a copy. */
+    static ProblemException broken(ProblemException found, String where) {
+        return new ProblemException(found.problems().stream()
+                .map(problem -> new Problem(
+                        problem.code(),
+                        problem.what(),
+                        problem.where().isEmpty() ? where : where + ", " + problem.where(),
+                        "Take the file from another copy. Nothing was changed."))
+                .toList());
     }
 
     static ProblemException wrong(String code, String what, Object where, String mend) {

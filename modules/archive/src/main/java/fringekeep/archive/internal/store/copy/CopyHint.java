@@ -38,7 +38,7 @@ public record CopyHint(ArchiveId archive, long n, Hash sha256) {
         if (!Files.exists(folder.hint())) {
             return Optional.empty();
         }
-        JsonObject object = CanonicalJson.readObject(Files.readAllBytes(folder.hint()), CanonicalJson.LARGEST_ENTRY);
+        JsonObject object = object(folder);
         String form = object.text("fringekeep").orElse("");
         try {
             if (form.equals(FORM) && object.integer("n").isPresent()) {
@@ -51,6 +51,14 @@ public record CopyHint(ArchiveId archive, long n, Hash sha256) {
             throw wrong(folder, "says of itself something malformed: " + e.getMessage());
         }
         throw wrong(folder, "says it has the form \"" + form + "\"; a plain copy has \"" + FORM + "\"");
+    }
+
+    private static JsonObject object(CopyFolder folder) throws IOException, ProblemException {
+        try {
+            return CanonicalJson.readObject(Files.readAllBytes(folder.hint()), CanonicalJson.LARGEST_ENTRY);
+        } catch (ProblemException e) {
+            throw CopyContents.broken(e, folder.hint().toString());
+        }
     }
 
     private static ProblemException wrong(CopyFolder folder, String what) {

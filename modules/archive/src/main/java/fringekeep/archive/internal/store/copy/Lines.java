@@ -37,6 +37,15 @@ final class Lines {
         return path + ", line " + (number + 1);
     }
 
+    /** Whether the next line is what should stand behind the hash: a line was broken in two and looks withheld. */
+    private boolean isBytesOf(Hash hash) {
+        int end = position;
+        while (end < bytes.length && bytes[end] != '\n') {
+            end++;
+        }
+        return Hash.of(Arrays.copyOfRange(bytes, position, end)).equals(hash);
+    }
+
     /** The next line without its end. */
     byte[] next() throws ProblemException {
         int end = end();
@@ -73,13 +82,14 @@ final class Lines {
         String where = place();
         int begin = position + HASH_LENGTH + 1;
         byte[] line = next();
-        if (line.length == HASH_LENGTH) {
+        boolean alone = line.length == HASH_LENGTH;
+        if (alone && !isBytesOf(hash)) {
             return false;
         }
         byte[] content = line.length > HASH_LENGTH && line[HASH_LENGTH] == ' '
                 ? Arrays.copyOfRange(line, HASH_LENGTH + 1, line.length)
                 : new byte[0];
-        if (!Hash.of(content).equals(hash)) {
+        if (alone || !Hash.of(content).equals(hash)) {
             throw CopyContents.wrong(
                     "copy.hash",
                     "The bytes of the line are not those of its hash " + hash + ".",
