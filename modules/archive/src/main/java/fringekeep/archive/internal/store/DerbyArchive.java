@@ -306,8 +306,10 @@ final class DerbyArchive implements Archive {
                         person.hex(),
                         "Check the id. Nothing was changed."));
             }
+            FreedPages.note(c, List.of("PERSON"));
             return progress.append(c, new Act.PersonErased(person));
         });
+        new FreedPages(store).clean();
     }
 
     @Override
@@ -317,13 +319,30 @@ final class DerbyArchive implements Archive {
         Hint.rewrite(store);
     }
 
+    /** Waits, however long, until no list is being filled. */
+    private void holdLists(Work quiet) {
+        try {
+            filling.hold(quiet);
+        } catch (StoppedException e) {
+            throw new IllegalStateException("quiet work is never stopped", e);
+        }
+    }
+
+    /** Waits until the lists that opening found unfilled are filled. */
+    void awaitLists() {
+        filling.awaitBackground();
+    }
+
     @Override
     public void purge(PurgeTarget target, Hash hash, String reason, String text) throws ProblemException {
         Arriving withoutIt = new Arriving(kinds, new Views(new Without(bytes, hash), kinds));
-        filling.<ProblemException>between(() -> {
+        holdLists(Work.QUIET);
+        try {
             new Purging(store, projections).purge(target, hash, reason, text, withoutIt);
             views.forget();
-        });
+        } finally {
+            filling.release();
+        }
     }
 
     @Override
@@ -348,17 +367,25 @@ final class DerbyArchive implements Archive {
 
     @Override
     public Received receive(Path folder, boolean withPersons, Work work) throws StoppedException, ProblemException {
-        Received received = receiving().receive(folder, withPersons, work);
-        views.forget();
-        return received;
+        filling.hold(work);
+        try {
+            return receiving().receive(folder, withPersons, work);
+        } finally {
+            views.forget();
+            filling.release();
+        }
     }
 
     @Override
     public Received receive(List<Hash> records, RecordSource source, Origin origin, Work work)
             throws StoppedException, ProblemException {
-        Received received = receiving().receive(records, source, origin, work);
-        views.forget();
-        return received;
+        filling.hold(work);
+        try {
+            return receiving().receive(records, source, origin, work);
+        } finally {
+            views.forget();
+            filling.release();
+        }
     }
 
     private Receiving receiving() {

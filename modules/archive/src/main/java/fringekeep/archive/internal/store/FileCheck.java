@@ -175,6 +175,7 @@ final class FileCheck {
         }
         try (Stream<Path> files = Files.list(at.store().folder().aside())) {
             files.sorted()
+                    .filter(file -> !file.equals(at.store().folder().formerDatabase()))
                     .forEach(file -> faults.orphan(
                             "orphan.aside", "A file was left where files are written first.", file.toString()));
         }

@@ -11,6 +11,8 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.concurrent.TimeUnit;
+import java.util.concurrent.locks.ReentrantLock;
 
 /**
  * Fills projections: after opening those that are new or declared otherwise, on request all, and the words that records are
@@ -19,10 +21,11 @@ import java.util.Map;
 final class Filling implements AutoCloseable {
     private static final System.Logger LOG = System.getLogger(Filling.class.getName());
     private static final int STEP = 100;
+    private static final long WAIT_MILLISECONDS = 200;
     private final Store store;
     private final Projections projections;
     private final Arriving arriving;
-    private final Object oneAtATime = new Object();
+    private final ReentrantLock oneAtATime = new ReentrantLock();
     private final Thread thread;
     private final List<String> unfilled = new ArrayList<>();
     private volatile boolean closing;
@@ -49,34 +52,65 @@ final class Filling implements AutoCloseable {
     }
 
     private void fillInBackground() {
+        Work quiet = new Quiet();
+        int last = unfilled.size() - 1;
+        oneAtATime.lock();
         try {
-            rebuild(List.copyOf(unfilled), new Quiet());
+            // A kind whose schema number rose may say other words too. The last list comes after them, so that what a
+            // stop
+            // cuts short begins again at the next opening.
+            rebuild(unfilled.subList(0, last), quiet);
+            new WordFilling(store, arriving).rebuild(quiet);
+            rebuild(unfilled.subList(last, unfilled.size()), quiet);
         } catch (StoppedException e) {
             LOG.log(System.Logger.Level.DEBUG, "filling lists was stopped; it begins again at the next opening");
         } catch (RuntimeException e) {
             LOG.log(System.Logger.Level.ERROR, "filling lists failed", e);
+        } finally {
+            oneAtATime.unlock();
         }
     }
 
     /** Makes all projections and words anew. */
     void rebuild(Work work) throws StoppedException, ProblemException {
-        rebuild(projections.names(), work);
-        synchronized (oneAtATime) {
+        hold(work);
+        try {
+            rebuild(projections.names(), work);
             new WordFilling(store, arriving).rebuild(work);
+        } finally {
+            release();
         }
     }
 
-    /** Something that must not fall into a filling, such as taking away what rows and words were worked out from. */
-    @FunctionalInterface
-    interface Alone<E extends Exception> {
-        void run() throws E;
+    /**
+     * Waits until no filling is under way, and keeps others from beginning until {@link #release}: rows worked out before a
+     * part was purged or supplied would otherwise be put in place after it.
+     *
+     * @throws StoppedException if the work was stopped while waiting; then nothing is held
+     */
+    void hold(Work work) throws StoppedException {
+        boolean interrupted = false;
+        try {
+            boolean held = oneAtATime.tryLock();
+            while (!held) {
+                work.check();
+                work.progress(0, 1, "waiting until lists are filled");
+                try {
+                    held = oneAtATime.tryLock(WAIT_MILLISECONDS, TimeUnit.MILLISECONDS);
+                } catch (InterruptedException e) {
+                    interrupted = true;
+                }
+            }
+        } finally {
+            if (interrupted) {
+                Thread.currentThread().interrupt();
+            }
+        }
     }
 
-    /** Does it when no filling is under way: rows worked out before would bring back what it takes away. */
-    <E extends Exception> void between(Alone<E> what) throws E {
-        synchronized (oneAtATime) {
-            what.run();
-        }
+    /** Lets fillings begin again; on the thread that holds them. */
+    void release() {
+        oneAtATime.unlock();
     }
 
     /** Returns when a swap that has begun is known to all readers; they happen on the writer thread. */
@@ -85,13 +119,11 @@ final class Filling implements AutoCloseable {
     }
 
     private void rebuild(List<String> names, Work work) throws StoppedException {
-        synchronized (oneAtATime) {
-            for (int i = 0; i < names.size(); i++) {
-                work.progress(i, names.size(), names.get(i));
-                rebuild(names.get(i), work);
-            }
-            work.progress(names.size(), names.size(), "");
+        for (int i = 0; i < names.size(); i++) {
+            work.progress(i, names.size(), names.get(i));
+            rebuild(names.get(i), work);
         }
+        work.progress(names.size(), names.size(), "");
     }
 
     private void rebuild(String name, Work work) throws StoppedException {
@@ -159,6 +191,11 @@ final class Filling implements AutoCloseable {
     @Override
     public void close() {
         closing = true;
+        awaitBackground();
+    }
+
+    /** Returns when the filling that opening began has ended. */
+    void awaitBackground() {
         boolean interrupted = false;
         while (thread.isAlive()) {
             try {

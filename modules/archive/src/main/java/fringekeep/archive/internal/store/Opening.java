@@ -121,8 +121,7 @@ final class Opening {
             writer = new Writer(transactor);
             Database opened = database;
             State state = writer.<State, ProblemException>run(own -> {
-                new Migrations(migrations)
-                        .apply(own, Instant.now(), folder.aside().resolve("db-before"));
+                new Migrations(migrations).apply(own, Instant.now(), folder.formerDatabase());
                 return start.state(own, opened);
             });
             Hint.write(folder, state);

@@ -17,11 +17,14 @@ import java.sql.SQLException;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Set;
+import java.util.TreeSet;
 import java.util.regex.Pattern;
 
 /**
  * Taking bytes away for cause, and refusing them when they come again. Hash and reason stay in the journal. The entry is
- * committed first, then the file goes; what a crash leaves in between is removed at the next opening.
+ * committed first, then the file goes and the database's freed pages; what a crash leaves in between is removed at the next
+ * opening.
  */
 final class Purging {
     private static final Pattern REASON = Pattern.compile("[a-z]+(-[a-z]+)*");
@@ -55,9 +58,25 @@ final class Purging {
             for (Renewal renewal : renewals) {
                 renewal.write(c, projections);
             }
+            FreedPages.note(c, touched(target, renewals));
             return true;
         });
         deleteFile(target, hash);
+        new FreedPages(store).clean();
+    }
+
+    /** Tables that held the bytes, or words and rows worked out from them. */
+    private Set<String> touched(PurgeTarget target, List<Renewal> renewals) {
+        return switch (target) {
+            case RAW -> Set.of();
+            case PAYLOAD -> Set.of("PAYLOAD");
+            case PART -> {
+                Set<String> tables = new TreeSet<>(Set.of("PART", "WORD"));
+                renewals.forEach(renewal ->
+                        tables.addAll(projections.tables(renewal.record().kind())));
+                yield tables;
+            }
+        };
     }
 
     private static void requireReason(String reason, String text) throws ProblemException {
@@ -154,7 +173,7 @@ final class Purging {
         }
     }
 
-    /** Removes files that were purged when a crash came before they were gone. */
+    /** Removes files and freed pages of what was purged when a crash came before they were gone. */
     static void sweep(Store store) {
         for (Hash hash : store.state().purged()) {
             try {
@@ -164,5 +183,6 @@ final class Purging {
                 throw new StoreFailure("Removing the purged file " + hash, e);
             }
         }
+        new FreedPages(store).clean();
     }
 }

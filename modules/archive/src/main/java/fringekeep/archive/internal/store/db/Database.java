@@ -73,6 +73,18 @@ public final class Database implements AutoCloseable {
         return uncommitted.inUse() + committed.inUse();
     }
 
+    /** Does something, on the writer's way in, while nobody reads; readers wait until it is done. */
+    public void alone(Runnable work) {
+        uncommitted.shut();
+        committed.shut();
+        try {
+            work.run();
+        } finally {
+            committed.open();
+            uncommitted.open();
+        }
+    }
+
     /** The writer's way in; ask once. */
     public Transactor transactor() throws SQLException {
         return new Transactor(connect(Connection.TRANSACTION_READ_COMMITTED));

@@ -14,7 +14,7 @@ import java.util.List;
  * @param text its statements, each ended by a semicolon at the end of a line
  */
 public record Migration(int number, String text) {
-    private static final List<String> NAMES = List.of("V001__records.sql", "V002__counts.sql");
+    private static final List<String> NAMES = List.of("V001__records.sql", "V002__counts.sql", "V003__freed.sql");
 
     /** All steps of this program in order. */
     public static List<Migration> all() {

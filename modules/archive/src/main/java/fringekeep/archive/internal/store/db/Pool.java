@@ -67,6 +67,16 @@ final class Pool implements AutoCloseable {
         }
     }
 
+    /** Keeps everybody out until {@link #open}; returns when nobody is in. */
+    void shut() {
+        permits.acquireUninterruptibly(SIZE);
+    }
+
+    /** Lets readers in again. */
+    void open() {
+        permits.release(SIZE);
+    }
+
     int inUse() {
         return SIZE - permits.availablePermits();
     }

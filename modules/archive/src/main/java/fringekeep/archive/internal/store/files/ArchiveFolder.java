@@ -38,6 +38,11 @@ public record ArchiveFolder(Path root) {
         return root.resolve("payloads");
     }
 
+    /** The database as it was before its tables were last brought forward. */
+    public Path formerDatabase() {
+        return aside().resolve("db-before");
+    }
+
     /** Where files are written before they get their names. */
     public Path aside() {
         return root.resolve("aside");

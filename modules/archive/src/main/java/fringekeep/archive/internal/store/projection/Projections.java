@@ -221,6 +221,14 @@ public final class Projections {
         }
     }
 
+    /** Names, as the engine has them, of all tables of a kind. */
+    public List<String> tables(KindName kind) {
+        return declared.values().stream()
+                .filter(one -> one.projection().kind().equals(kind))
+                .map(one -> unquoted(one.table()))
+                .toList();
+    }
+
     /** Stored rows of a record in one table, for comparing. */
     public List<Row> stored(Connection c, String name, long n) throws SQLException {
         Declared one = one(name);
