@@ -2,70 +2,57 @@ package fringekeep.bundle;
 
 import static org.assertj.core.api.Assertions.assertThat;
 
+import fringekeep.archive.Archive;
+import fringekeep.archive.Archives;
+import fringekeep.archive.Circumstances;
+import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.Work;
-import java.io.File;
-import java.net.URI;
-import java.net.URLClassLoader;
+import fringekeep.archive.record.Hash;
+import fringekeep.testsupport.OtherProgram;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.Arrays;
 import java.util.List;
-import java.util.Random;
-import java.util.stream.Collectors;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 
-/** What a killed export leaves behind. */
+/** What a killed export leaves behind: whole bundles under final names, and an archive without a fault. */
 class ExportDurabilityTest {
-    private static final int ROUNDS = 4;
-
     @TempDir
     private Path folder;
 
     @Test
     void whatStandsUnderAFinalNameIsWhole() throws Exception {
-        Random random = new Random(20310514);
         int found = 0;
-        for (int round = 0; round < ROUNDS; round++) {
+        for (int round = 0; round < OtherProgram.kills(); round++) {
             Path place = Files.createDirectory(folder.resolve("round-" + round));
             Path out = Files.createDirectory(place.resolve("out"));
-            assertThat(run(place, 30 + random.nextInt(300)))
-                    .as("%s", Files.readString(folder.resolve("words")))
-                    .isEqualTo(HaltedExport.HALTED);
+            List<String> lines =
+                    OtherProgram.runUntilHalted(HaltedExport.class, place.toString(), Integer.toString(round));
             for (Path bundle : finalNames(out)) {
-                BundleReport report = CheckBundle.check(bundle, SmallArchive.kinds(), Level.FILES_INTACT, Work.QUIET);
+                BundleReport report = CheckBundle.check(bundle, SmallArchive.kinds(), Level.RECOMPUTED, Work.QUIET);
                 assertThat(report.level())
-                        .as("%s %s", bundle, report.allFaults())
-                        .isEqualTo(Level.FILES_INTACT);
+                        .as("round %d: %s %s", round, bundle, report.allFaults())
+                        .isEqualTo(Level.RECOMPUTED);
                 found++;
             }
+            archiveIsWhole(place.resolve("archive"), lines, round);
         }
         assertThat(found).isPositive();
     }
 
-    private int run(Path place, int reports) throws Exception {
-        Process process = new ProcessBuilder(
-                        Path.of(System.getProperty("java.home"), "bin", "java").toString(),
-                        "-cp",
-                        classPath(),
-                        HaltedExport.class.getName(),
-                        place.toString(),
-                        Integer.toString(reports))
-                .redirectErrorStream(true)
-                .redirectOutput(folder.resolve("words").toFile())
-                .start();
-        return process.waitFor();
-    }
-
-    /** The class path of the tests, however they were started. */
-    private static String classPath() {
-        if (ExportDurabilityTest.class.getClassLoader() instanceof URLClassLoader loader) {
-            return Arrays.stream(loader.getURLs())
-                    .map(url -> Path.of(URI.create(url.toString())).toString())
-                    .collect(Collectors.joining(File.pathSeparator));
+    private static void archiveIsWhole(Path place, List<String> lines, int round) throws Exception {
+        List<Hash> recorded = lines.stream()
+                .filter(line -> line.matches("done [0-9a-f]{64}"))
+                .map(line -> new Hash(line.substring(5)))
+                .toList();
+        assertThat(recorded).as("round %d", round).hasSize(1);
+        try (Archive archive = Archives.open(place, SmallArchive.kinds(), Circumstances.real("1.0.0"))) {
+            assertThat(archive.record(recorded.get(0))).isPresent();
+            assertThat(archive.check(Work.QUIET).stream().map(Problem::code))
+                    .as("round %d", round)
+                    .allMatch(code -> code.startsWith("orphan."));
         }
-        return System.getProperty("java.class.path");
     }
 
     private static List<Path> finalNames(Path out) throws Exception {

@@ -3,23 +3,35 @@ package fringekeep.bundle;
 import fringekeep.archive.Archive;
 import fringekeep.archive.problem.Work;
 import fringekeep.archive.record.Hash;
+import fringekeep.testsupport.OtherProgram;
+import java.io.PrintStream;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Random;
 
-/** A program that exports under one name after another and dies at a given report of progress. */
+/** A program that exports under one name after another until it halts at a random report of progress or moment. */
 final class HaltedExport {
-    /** Exit value of one that died as it was told. */
-    static final int HALTED = 7;
+    private static final int MOST_REPORTS = 300;
+    private static final int MILLISECONDS = 900;
 
     private HaltedExport() {}
 
-    /** Arguments: a folder that is there, the number of reports before the end. */
+    /** Arguments: a folder that is there, the round. Writes each record it has recorded. */
     public static void main(String[] arguments) throws Exception {
+        PrintStream out = new PrintStream(System.out, true, StandardCharsets.UTF_8);
         Path folder = Path.of(arguments[0]);
-        Work work = halting(Integer.parseInt(arguments[1]));
+        int round = Integer.parseInt(arguments[1]);
+        Random random = new Random(20310514L + round);
+        boolean byReports = round % 2 == 0;
+        Work work = byReports ? halting(1 + random.nextInt(MOST_REPORTS)) : Work.QUIET;
         SmallArchive small = SmallArchive.found(folder.resolve("archive"));
         try (Archive archive = small.archive()) {
             Hash root = ExportedOnce.root(small);
+            out.println("done " + root);
+            if (!byReports) {
+                OtherProgram.haltWithin(random, MILLISECONDS);
+            }
             for (int i = 0; ; i++) {
                 ExportBundle.export(
                         archive,
@@ -39,7 +51,7 @@ final class HaltedExport {
             @Override
             public void progress(long done, long total, String what) {
                 if (left-- == 0) {
-                    Runtime.getRuntime().halt(HALTED);
+                    Runtime.getRuntime().halt(0);
                 }
             }
 

@@ -102,7 +102,8 @@ public final class Bag {
         text.append(line).append('\n');
     }
 
-    private static String manifest(SortedMap<String, String> sums) {
+    /** A list of checksums by path, as every bundle has it: digits in lower case, two spaces, the path, a line end. */
+    static String manifest(SortedMap<String, String> sums) {
         StringBuilder text = new StringBuilder();
         sums.forEach((path, sum) ->
                 text.append(sum).append("  ").append(encode(path)).append('\n'));

@@ -59,6 +59,7 @@ public final class BagFaults {
         for (String algorithm : Bag.ALGORITHMS.keySet()) {
             manifest("manifest-" + algorithm + ".txt", algorithm, payloadPaths(payload), true);
             manifest("tagmanifest-" + algorithm + ".txt", algorithm, tagPaths(), false);
+            spelling("tagmanifest-" + algorithm + ".txt", algorithm);
         }
         oxum(octets, payload.size());
     }
@@ -108,6 +109,23 @@ public final class BagFaults {
         unlisted.removeAll(listed);
         for (String path : unlisted) {
             fault(required ? "bundle.unlisted" : "bundle.unlisted-tag", path + " is not listed in " + name + ".", path);
+        }
+    }
+
+    /** No checksum protects the last lists, so only their exact spelling tells that no byte of them was changed. */
+    private void spelling(String name, String algorithm) throws IOException {
+        SortedMap<String, String> sums = new TreeMap<>();
+        for (String path : tagPaths()) {
+            String sum = found.getOrDefault(path, new TreeMap<>()).get(algorithm);
+            sums.put(path, java.util.Objects.requireNonNull(sum, path));
+        }
+        Path file = bag.resolve(name);
+        if (faults.isEmpty() && !text(file).equals(Bag.manifest(sums))) {
+            fault(
+                    "bundle.list-spelling",
+                    name + " says what it should, but not as bundles are written: checksums in lower case, two spaces,"
+                            + " paths in order.",
+                    name);
         }
     }
 
