@@ -98,6 +98,18 @@ public final class PropertyKind implements RecordKind {
                     "/choices/search",
                     "Let from be less than to."));
         }
+        boolean held = parts.get(PartName.CHOICES)
+                .filter(choices -> choices.text("visibility").orElse("").equals("relative"))
+                .flatMap(choices -> choices.object("factor"))
+                .map(factor -> factor.text("sort").orElse("").equals("given"))
+                .orElse(false);
+        if (held) {
+            problems.add(new Problem(
+                    "property.relative-factor",
+                    "Visibilities are taken relative to references, whose own visibility is part of the factor.",
+                    "/choices/factor",
+                    "Let the factor be free, or take visibilities as fitted."));
+        }
         return problems;
     }
 
@@ -108,6 +120,9 @@ public final class PropertyKind implements RecordKind {
         }
         if (facet == Estimates.class) {
             return Optional.of(facet.cast(PropertyFacets.estimates(record)));
+        }
+        if (facet == StatedUnits.class) {
+            return Optional.of(facet.cast(PropertyFacets.units()));
         }
         if (facet == Plottable.class) {
             try {

@@ -51,6 +51,12 @@ public final class SelectFits {
      * @param below number it must be less than (SI)
      */
     public record Condition(String column, Optional<String> is, OptionalDouble from, OptionalDouble below) {
+        /** A condition as a selection's content states it. */
+        static Condition of(JsonObject json) {
+            return new Condition(
+                    json.text("column").orElse(""), json.text("is"), json.number("from"), json.number("below"));
+        }
+
         private JsonObject json() {
             JsonObject json = JsonObject.EMPTY.with("column", column).with("is", is.map(Json::of));
             json = from.isPresent() ? json.with("from", from.getAsDouble()) : json;
@@ -68,29 +74,95 @@ public final class SelectFits {
      */
     public NewRecord select(String label, String rule, List<Condition> conditions, PersonId person)
             throws ProblemException {
-        List<Hash> taken = new ArrayList<>();
-        Map<Hash, String> left = new LinkedHashMap<>();
-        for (Hash fit : answering(conditions)) {
-            Optional<String> reason = reason(fit);
-            if (reason.isPresent()) {
-                left.put(fit, reason.get());
-            } else {
-                taken.add(fit);
-            }
-        }
-        if (taken.isEmpty()) {
+        Resolved resolved = resolve(answering(conditions));
+        if (resolved.taken().isEmpty()) {
             throw new ProblemException(new Problem(
                     "selection.nothing",
-                    left.isEmpty()
+                    resolved.left().isEmpty()
                             ? "No current fit answers the rule."
-                            : "All " + left.size() + " fits that answer the rule are left out.",
+                            : "All " + resolved.left().size() + " fits that answer the rule are left out.",
                     "/content/conditions",
                     "Fit the scans first, or widen the rule; nothing has been stored."));
         }
-        return request(label, rule, conditions, taken, left, person);
+        return request(label, rule, conditions, resolved, person);
     }
 
-    private List<Hash> answering(List<Condition> conditions) throws ProblemException {
+    /**
+     * What became of the fits that answer a rule.
+     *
+     * @param taken those taken, in order
+     * @param left those left out
+     */
+    record Resolved(List<Hash> taken, Map<Hash, Left> left) {}
+
+    /**
+     * Why a fit is left out.
+     *
+     * @param reason code of the closed list
+     * @param because the judgement that decided
+     */
+    record Left(String reason, Optional<Hash> because) {}
+
+    /**
+     * Takes or leaves out each fit.
+     *
+     * @throws ProblemException if several fits answer one question and no judgement prefers one
+     */
+    Resolved resolve(List<Hash> fits) throws ProblemException {
+        List<Hash> taken = new ArrayList<>();
+        Map<Hash, Left> left = new LinkedHashMap<>();
+        Map<String, List<Hash>> questions = new LinkedHashMap<>();
+        for (Hash fit : fits) {
+            Optional<Left> reason = reason(fit);
+            if (reason.isPresent()) {
+                left.put(fit, reason.get());
+            } else {
+                questions
+                        .computeIfAbsent(question(fit), any -> new ArrayList<>())
+                        .add(fit);
+                taken.add(fit);
+            }
+        }
+        for (List<Hash> rivals : questions.values()) {
+            if (rivals.size() > 1) {
+                Graph.Preference preference = preference(rivals);
+                for (Hash passedOver : rivals) {
+                    if (!preference.chosen().equals(Optional.of(passedOver))) {
+                        left.put(passedOver, new Left("other-choice", preference.because()));
+                    }
+                }
+            }
+        }
+        taken.removeIf(left::containsKey);
+        return new Resolved(List.copyOf(taken), left);
+    }
+
+    private String question(Hash fit) {
+        return archive.record(fit)
+                .flatMap(view -> archive.kinds()
+                        .get(view.head().kind())
+                        .flatMap(kind -> kind.question(view, archive.inputs(fit))))
+                .orElse(fit.hex());
+    }
+
+    /** Counts of one scan must not enter twice: where several fits of it answer the rule, a judgement has to say which. */
+    private Graph.Preference preference(List<Hash> rivals) throws ProblemException {
+        Graph.Preference preference = graph.preferred(rivals);
+        if (preference.chosen().isEmpty()) {
+            throw new ProblemException(new Problem(
+                    "selection.rivals",
+                    "Several fits of the same scans answer the rule and none is preferred: "
+                            + String.join(
+                                    ", ", rivals.stream().map(archive::label).toList())
+                            + ".",
+                    "/content/conditions",
+                    "Prefer one of them by a judgement, or narrow the rule; nothing has been stored."));
+        }
+        return preference;
+    }
+
+    /** Current fits that answer, in journal order. */
+    List<Hash> answering(List<Condition> conditions) throws ProblemException {
         List<Listing.Filter> filters = new ArrayList<>();
         for (Condition condition : conditions) {
             condition
@@ -117,14 +189,17 @@ public final class SelectFits {
         return List.copyOf(found);
     }
 
-    private Optional<String> reason(Hash fit) {
+    /** Why a fit is left out by itself: it or what it rests on is withdrawn, or it is outdated. */
+    Optional<Left> reason(Hash fit) {
         Set<StateName> states = graph.states(fit);
         boolean scanWithdrawn = graph.upstream(fit).stream()
                 .anyMatch(record -> graph.states(record).contains(StateName.WITHDRAWN));
         if (states.contains(StateName.WITHDRAWN) || scanWithdrawn) {
-            return Optional.of("withdrawn");
+            return Optional.of(new Left("withdrawn", judgement(fit)));
         }
-        return states.contains(StateName.OUTDATED) ? Optional.of("outdated") : Optional.empty();
+        return states.contains(StateName.OUTDATED)
+                ? Optional.of(new Left("outdated", Optional.empty()))
+                : Optional.empty();
     }
 
     /** Judgements on a fit or on anything it was made from, the first of which is said to have decided. */
@@ -136,23 +211,17 @@ public final class SelectFits {
         return all.stream().findFirst();
     }
 
-    private NewRecord request(
-            String label,
-            String rule,
-            List<Condition> conditions,
-            List<Hash> taken,
-            Map<Hash, String> left,
-            PersonId person) {
+    NewRecord request(String label, String rule, List<Condition> conditions, Resolved resolved, PersonId person) {
         List<InputReference> inputs = new ArrayList<>();
-        taken.forEach(fit -> inputs.add(new InputReference.OfRecord(SelectionKind.TAKEN, fit)));
+        resolved.taken().forEach(fit -> inputs.add(new InputReference.OfRecord(SelectionKind.TAKEN, fit)));
         List<AboutReference> about = new ArrayList<>();
         List<Json> reasons = new ArrayList<>();
-        for (Map.Entry<Hash, String> each : left.entrySet()) {
-            JsonObject reason = JsonObject.EMPTY.with("about", about.size()).with("reason", each.getValue());
-            Optional<Hash> judgement =
-                    each.getValue().equals("withdrawn") ? judgement(each.getKey()) : Optional.empty();
-            if (judgement.isPresent()) {
-                InputReference because = new InputReference.OfRecord(SelectionKind.BECAUSE, judgement.get());
+        for (Map.Entry<Hash, Left> each : resolved.left().entrySet()) {
+            Left decided = each.getValue();
+            JsonObject reason = JsonObject.EMPTY.with("about", about.size()).with("reason", decided.reason());
+            if (decided.because().isPresent()) {
+                InputReference because = new InputReference.OfRecord(
+                        SelectionKind.BECAUSE, decided.because().get());
                 if (!inputs.contains(because)) {
                     inputs.add(because);
                 }

@@ -36,6 +36,8 @@ public final class PolarizabilityComputation implements Computation {
         complete = text(complete, "description", "quantum");
         complete = text(complete, "powerSetting", "laser power");
         complete = text(complete, "bias", "noise-subtracted");
+        complete = text(complete, "visibility", "as-fitted");
+        complete = text(complete, "powers", "independent");
         complete = text(complete, "recoil", "standing-mode-coherent");
         complete = number(complete, "threshold", PowerCurveChoices.ODDS_OF_A_HUNDRED);
         complete = number(complete, "level", 0.6827);
@@ -86,10 +88,11 @@ public final class PolarizabilityComputation implements Computation {
         }
     }
 
-    private static Outcome answer(PowerQuestion question, Work work) throws StoppedException {
+    private static Outcome answer(PowerQuestion asked, Work work) throws StoppedException {
+        boolean quantum = asked.choices().text("description").orElse("").equals("quantum");
+        PowerQuestion question = Readings.widened(asked, quantum ? Description.QUANTUM : Description.CLASSICAL);
         PowerCurveComparison comparison =
                 PowerCurveComparison.of(question.fitter(Shift.NONE), question.data(Shift.NONE));
-        boolean quantum = question.choices().text("description").orElse("").equals("quantum");
         FitOutcome stated = quantum ? comparison.quantum() : comparison.classical();
         if (stated instanceof FitRefused refused) {
             return new Outcome.NoResult(List.of(new Problem(

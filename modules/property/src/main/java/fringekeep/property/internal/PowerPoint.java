@@ -9,11 +9,18 @@ import java.util.List;
  *
  * @param fit the fit
  * @param reading power as read (W)
+ * @param readingDeviation its standard uncertainty as stated (W), 0 where it is exact or not used; NaN where none is stated
  * @param calibrations what the fit pins for the power, with their records, applied in order
- * @param visibility amplitude over mean
+ * @param visibility amplitude over mean, or that over the references'
  * @param deviation its standard uncertainty
  */
-record PowerPoint(Hash fit, double reading, List<Pinned> calibrations, double visibility, double deviation) {
+record PowerPoint(
+        Hash fit,
+        double reading,
+        double readingDeviation,
+        List<Pinned> calibrations,
+        double visibility,
+        double deviation) {
     PowerPoint {
         calibrations = List.copyOf(calibrations);
     }
@@ -40,10 +47,22 @@ record PowerPoint(Hash fit, double reading, List<Pinned> calibrations, double vi
 
     /** Power at the grating (W). */
     double power(Shift shift) {
-        double power = reading;
+        double power = reading + shift.readings() * (Double.isNaN(readingDeviation) ? 0 : readingDeviation);
         for (Pinned pinned : calibrations) {
             power = pinned.moved(shift).apply(power).value();
         }
         return power;
+    }
+
+    /** Standard uncertainty of the power at the grating from the reading alone (W), by the slopes of the calibrations. */
+    double powerDeviation() {
+        double power = reading;
+        double deviation = Double.isNaN(readingDeviation) ? 0 : readingDeviation;
+        for (Pinned pinned : calibrations) {
+            CalibrationFacet.Calibrated at = pinned.calibration().apply(power);
+            power = at.value();
+            deviation *= Math.abs(at.slope());
+        }
+        return deviation;
     }
 }

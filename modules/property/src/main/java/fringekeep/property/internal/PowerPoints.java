@@ -7,6 +7,7 @@ import fringekeep.archive.kind.Input;
 import fringekeep.archive.kind.Inputs;
 import fringekeep.archive.problem.Problem;
 import fringekeep.archive.record.Hash;
+import fringekeep.fit.FringeFacet;
 import fringekeep.instrument.CalibrationFacet;
 import fringekeep.instrument.CalibrationTarget;
 import fringekeep.scan.SettingsFacet;
@@ -58,7 +59,7 @@ final class PowerPoints {
 
     private Optional<PowerPoint> point(Input fit) {
         Optional<Estimates> estimates = fit.facet(Estimates.class);
-        OptionalDouble power = reading(fit);
+        Optional<Reading> power = reading(fit);
         if (estimates.isEmpty() || power.isEmpty()) {
             String name = choices.text("powerSetting").orElse("");
             problems.add(new Problem(
@@ -69,19 +70,45 @@ final class PowerPoints {
                     "Leave the fit out, or name the setting that holds the power."));
             return Optional.empty();
         }
-        return visibility(estimates.get(), fit.target())
-                .map(visibility -> new PowerPoint(
-                        fit.target(), power.getAsDouble(), calibrations(fit), visibility[0], visibility[1]));
+        boolean relative = choices.text("visibility").orElse("").equals("relative");
+        Optional<double[]> visibility = relative ? relative(fit) : visibility(estimates.get(), fit.target());
+        return visibility.map(each -> new PowerPoint(
+                fit.target(), power.get().value(), power.get().deviation(), calibrations(fit), each[0], each[1]));
     }
 
+    /** Visibility over that of the fit's references, which takes out what changed the contrast of both alike. */
+    private Optional<double[]> relative(Input fit) {
+        Optional<FringeFacet.Value> relative = fit.facet(FringeFacet.class).flatMap(FringeFacet::relativeVisibility);
+        if (relative.isEmpty() || !(relative.get().deviation() > 0)) {
+            problems.add(new Problem(
+                    "property.no-reference",
+                    "Fit " + fit.target().shortForm() + " states no visibility relative to references.",
+                    "/choices/visibility",
+                    "Fit the scan anew with its reference scans, leave it out, or take visibilities as fitted."));
+            return Optional.empty();
+        }
+        double variance = relative.get().deviation() * relative.get().deviation();
+        return Optional.of(new double[] {unbiased(relative.get().value(), variance), Math.sqrt(variance)});
+    }
+
+    private double unbiased(double visibility, double variance) {
+        boolean subtract = choices.text("bias").orElse("").equals("noise-subtracted");
+        return subtract ? Math.sqrt(Math.max(0, visibility * visibility - variance)) : visibility;
+    }
+
+    /** A power as read. */
+    private record Reading(double value, double deviation) {}
+
     /** The power of all scans of the fit, which must agree: fits of several scans are of one power. */
-    private OptionalDouble reading(Input fit) {
+    private Optional<Reading> reading(Input fit) {
         String name = choices.text("powerSetting").orElse("");
+        boolean used = Readings.Use.of(choices) != Readings.Use.AS_READ;
+        double deviation = 0;
         OptionalDouble power = OptionalDouble.empty();
         for (Input scan : fit.inputs().role("scan")) {
             Optional<SettingsFacet.Setting> setting = setting(fit, scan, name);
             if (setting.isEmpty()) {
-                return OptionalDouble.empty();
+                return Optional.empty();
             }
             double value = setting.get().value();
             if (power.isPresent() && Math.abs(power.getAsDouble() - value) > 1e-3 * Math.abs(value)) {
@@ -90,11 +117,13 @@ final class PowerPoints {
                         "The scans of fit " + fit.target().shortForm() + " differ in power.",
                         "/inputs",
                         "Fit scans of one power together only."));
-                return OptionalDouble.empty();
+                return Optional.empty();
             }
             power = OptionalDouble.of(value);
+            // scans fitted together are read by one meter: the largest uncertainty, NaN where one states none
+            deviation = used ? Math.max(deviation, setting.get().deviation()) : 0;
         }
-        return power;
+        return power.isPresent() ? Optional.of(new Reading(power.getAsDouble(), deviation)) : Optional.empty();
     }
 
     /** A setting of the scan's file, else of its placement's series step. */
@@ -192,9 +221,7 @@ final class PowerPoints {
                     "Leave the fit out, or fit it anew with an estimator for counts."));
             return Optional.empty();
         }
-        boolean subtract = choices.text("bias").orElse("").equals("noise-subtracted");
-        double shown = subtract ? Math.sqrt(Math.max(0, visibility * visibility - variance)) : visibility;
-        return Optional.of(new double[] {shown, Math.sqrt(variance)});
+        return Optional.of(new double[] {unbiased(visibility, variance), Math.sqrt(variance)});
     }
 
     private static double propagated(Estimates estimates, int[] at, double[] gradient) {

@@ -8,8 +8,10 @@ import fringekeep.interferometry.molecule.PowerCurveChoices;
 import fringekeep.interferometry.molecule.PowerCurveFitter;
 import fringekeep.interferometry.nearfield.BeamEnsemble;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 
 /**
  * What is asked of the model: set-up, beam, points and choices, with any one shared parameter moved.
@@ -18,10 +20,18 @@ import java.util.Optional;
  * @param bench the set-up
  * @param beam the beam
  * @param points the fits, in order of power
+ * @param deviations standard uncertainty by which each point is weighted
  */
-record PowerQuestion(JsonObject choices, Bench bench, Beam beam, List<PowerPoint> points) {
+record PowerQuestion(JsonObject choices, Bench bench, Beam beam, List<PowerPoint> points, List<Double> deviations) {
     PowerQuestion {
         points = List.copyOf(points);
+        deviations = List.copyOf(deviations);
+    }
+
+    /** The same with other weights. */
+    PowerQuestion withDeviations(double[] others) {
+        return new PowerQuestion(
+                choices, bench, beam, points, Arrays.stream(others).boxed().toList());
     }
 
     /** Reads everything; empty with problems where something is missing. */
@@ -33,7 +43,12 @@ record PowerQuestion(JsonObject choices, Bench bench, Beam beam, List<PowerPoint
         Optional<Bench> bench = Bench.read(inputs, problems);
         Optional<Beam> beam = Beam.read(inputs, problems);
         return bench.isPresent() && beam.isPresent() && problems.isEmpty()
-                ? Optional.of(new PowerQuestion(choices, bench.get(), beam.get(), points))
+                ? Optional.of(new PowerQuestion(
+                        choices,
+                        bench.get(),
+                        beam.get(),
+                        points,
+                        points.stream().map(PowerPoint::deviation).toList()))
                 : Optional.empty();
     }
 
@@ -72,7 +87,7 @@ record PowerQuestion(JsonObject choices, Bench bench, Beam beam, List<PowerPoint
         for (int i = 0; i < powers.length; i++) {
             powers[i] = points.get(i).power(shift);
             visibilities[i] = points.get(i).visibility();
-            deviations[i] = points.get(i).deviation();
+            deviations[i] = this.deviations.get(i);
         }
         return new MeasuredCurve(powers, visibilities, deviations);
     }
@@ -82,6 +97,11 @@ record PowerQuestion(JsonObject choices, Bench bench, Beam beam, List<PowerPoint
         List<Shared> all = new ArrayList<>();
         for (PowerPoint point : points) {
             point.calibrations().forEach(pinned -> Bench.ofCalibration(pinned).forEach(each -> addOnce(all, each)));
+        }
+        boolean together = Readings.Use.of(choices) == Readings.Use.TOGETHER
+                && points.stream().anyMatch(point -> point.readingDeviation() > 0);
+        if (together) {
+            addOnce(all, new Shared(bench.record(), Readings.TOGETHER, 0, OptionalDouble.of(1)));
         }
         bench.shared(choices).forEach(each -> addOnce(all, each));
         beam.shared().forEach(each -> addOnce(all, each));

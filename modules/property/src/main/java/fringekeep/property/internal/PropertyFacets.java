@@ -8,7 +8,9 @@ import fringekeep.archive.kind.RecordView;
 import fringekeep.archive.kind.Sensitivity;
 import fringekeep.archive.problem.ProblemException;
 import fringekeep.archive.record.Hash;
+import fringekeep.property.StatedUnits;
 import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -19,6 +21,14 @@ public final class PropertyFacets {
             Map.of("polarizabilityVolume", "m3", "absorptionCrossSection", "m2", "visibilityFactor", "1");
 
     private PropertyFacets() {}
+
+    /** Units of every stated value, those in other units included. */
+    public static StatedUnits units() {
+        Map<String, String> units = new HashMap<>(UNITS);
+        units.put("polarizability", "C.m2/V");
+        units.put("polarizabilityAtomic", "1");
+        return new StatedUnits(units);
+    }
 
     private static JsonObject stated(RecordView record) {
         return record.result()

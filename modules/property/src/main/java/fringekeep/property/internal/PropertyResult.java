@@ -15,6 +15,7 @@ import fringekeep.interferometry.molecule.PowerCurveIntervals;
 import fringekeep.interferometry.molecule.PropertyFit;
 import fringekeep.interferometry.nearfield.Description;
 import fringekeep.interferometry.statistics.Interval;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
@@ -49,11 +50,17 @@ final class PropertyResult {
                 .with("quantum", description(comparison.quantum(), Description.QUANTUM))
                 .with("classical", description(comparison.classical(), Description.CLASSICAL))
                 .with("sensitivities", sensitivities(found))
-                .with("notStated", JsonArray.ofTexts(found.notStated()))
+                .with("notStated", JsonArray.ofTexts(notStated(found)))
                 .with("points", question.points().size())
                 .with("table", PowerCurves.POINTS);
         result = values(result, found);
         return bootstrap(result);
+    }
+
+    private List<String> notStated(Propagation.Found found) {
+        List<String> all = new ArrayList<>(found.notStated());
+        all.addAll(Readings.notStated(question));
+        return List.copyOf(all);
     }
 
     private static Optional<Json> finite(double value) {

@@ -20,4 +20,9 @@ record Shift(@Nullable Shared shared, double by) {
                 && shared.parameter().equals(parameter);
         return moved ? by : 0;
     }
+
+    /** How far all power readings are moved together, in units of their own standard uncertainties. */
+    double readings() {
+        return shared != null && shared.parameter().equals(Readings.TOGETHER) ? by : 0;
+    }
 }
