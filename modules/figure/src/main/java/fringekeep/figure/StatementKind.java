@@ -1,7 +1,6 @@
 package fringekeep.figure;
 
 import fringekeep.archive.json.JsonObject;
-import fringekeep.archive.kind.Input;
 import fringekeep.archive.kind.Inputs;
 import fringekeep.archive.kind.Parts;
 import fringekeep.archive.kind.RecordKind;
@@ -70,10 +69,8 @@ public final class StatementKind implements RecordKind {
     public List<Problem> examine(Parts parts, Inputs inputs) {
         JsonObject content = parts.get(PartName.CONTENT).orElse(JsonObject.EMPTY);
         return inputs.role("of").stream()
-                .map(Input::record)
-                .flatMap(java.util.Optional::stream)
                 .findFirst()
-                .map(record -> StatementCheck.problems(content, record))
+                .flatMap(input -> input.record().map(record -> StatementCheck.problems(content, record, input)))
                 .orElse(List.of());
     }
 

@@ -4,18 +4,22 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.catchThrowableOfType;
 import static org.assertj.core.api.Assertions.within;
 
+import fringekeep.archive.json.JsonArray;
 import fringekeep.archive.json.JsonDocument;
 import fringekeep.archive.json.JsonObject;
 import fringekeep.archive.kind.CsvPayload;
+import fringekeep.archive.kind.Parts;
 import fringekeep.archive.making.DetachedRecords;
 import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
 import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.InputReference;
+import fringekeep.archive.record.PartName;
 import fringekeep.drawing.Layer;
 import fringekeep.drawing.Picture;
 import java.nio.charset.StandardCharsets;
 import java.util.List;
+import java.util.Map;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -124,6 +128,52 @@ class FigureKindTest {
         Hash bare = records.enter("offering", JsonObject.EMPTY.with("bare", "yes"));
         List<InputReference> inputs = List.of(DetachedRecords.input("series", bare));
         refused(choices("mW", "%", series(0, series, "")), inputs, code, "/choices/panels/0/series/0/input");
+    }
+
+    @Test
+    void twoPanelsOfOneNameAreRefused() throws ProblemException {
+        JsonObject one = choices("mW", "%", series(0, "points", ""));
+        JsonObject panel = one.array("panels").objects().get(0);
+        refusedOnRecording(
+                one.with("panels", new JsonArray(List.of(panel, panel))),
+                "figure.panel-twice",
+                "/choices/panels/1/name");
+    }
+
+    @ParameterizedTest
+    @CsvSource({"x, 2, 2", "y, 3, 1"})
+    void anAxisThatEndsBeforeItBeginsIsRefused(String axis, double from, double to) throws ProblemException {
+        JsonObject one = choices("mW", "%", series(0, "points", ""));
+        JsonObject panel = one.array("panels").objects().get(0);
+        JsonObject range = panel.object(axis).orElseThrow().with("from", from).with("to", to);
+        refusedOnRecording(
+                one.with("panels", new JsonArray(List.of(panel.with(axis, range)))),
+                "figure.empty-axis",
+                "/choices/panels/0/" + axis);
+    }
+
+    /** A unit that no table of UCUM codes has is named at its axis when it is computed, and again when it is recorded. */
+    @Test
+    void aUnitThatIsNoneIsNamedAtItsAxis() throws ProblemException {
+        JsonObject good = choices("mW", "%", series(0, "points", ""));
+        JsonObject panel = good.array("panels").objects().get(0);
+        JsonObject axis = panel.object("x").orElseThrow().with("unit", "furlong?");
+        JsonObject bad = good.with("panels", new JsonArray(List.of(panel.with("x", axis))));
+        Parts parts = new Parts(Map.of(PartName.CHOICES, bad));
+        List<Problem> problems = new FigureKind().examine(parts, records.inputs(records.enter("offering", good)));
+        assertThat(problems).extracting(Problem::where).contains("/choices/panels/0/x/unit");
+        assertThat(problems).allSatisfy(problem -> assertThat(problem.mend()).isNotBlank());
+    }
+
+    /** The computation works; the rules of the kind say no before anything is stored. */
+    private void refusedOnRecording(JsonObject choices, String code, String where) throws ProblemException {
+        List<InputReference> inputs = offering();
+        ProblemException thrown =
+                catchThrowableOfType(ProblemException.class, () -> records.compute("figure", choices, inputs));
+        assertThat(thrown).isNotNull();
+        assertThat(thrown.problems()).extracting(Problem::code).containsExactly(code);
+        assertThat(thrown.problems().get(0).where()).isEqualTo(where);
+        assertThat(thrown.problems().get(0).mend()).isNotBlank();
     }
 
     private void refused(JsonObject choices, List<InputReference> inputs, String code, String where) {

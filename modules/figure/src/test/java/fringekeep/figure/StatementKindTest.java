@@ -20,12 +20,19 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
-/** Printed numbers against records; the mass is the example of JCGM 100:2008, 7.2.2: 100.02147 g with u = 0.35 mg. */
+/**
+ * Printed numbers against records; the mass is the example of JCGM 100:2008, 7.2.2: 100.02147 g with u = 0.35 mg. Parts of 30
+ * and 40 pm combine to 50 pm (JCGM 100:2008, 5.1.2).
+ */
 class StatementKindTest {
     private static final String CONTENT = "{\"mass\":{\"si\":0.10002147,\"uncertainty\":{\"si\":3.5e-7}},"
             + "\"answer\":{\"value\":0.10002147,\"u\":3.5e-7,\"statistical\":2.1e-7},"
             + "\"estimates\":[\"first\",\"second\"],\"values\":[0.5,0.25],\"covariance\":[0.0001,0,0.0004],"
-            + "\"plain\":0.125,\"word\":\"none\"}";
+            + "\"plain\":0.125,\"word\":\"none\","
+            + "\"apart\":{\"value\":2e-9,\"u\":5e-11,\"statistical\":3e-11,\"shared\":4e-11},"
+            + "\"list\":{\"estimates\":[\"length\",\"visibility\"],\"values\":[2e-9,0.5],\"covariance\":[9e-22,0,1e-4]},"
+            + "\"rival\":{\"estimates\":[\"length\"],\"values\":[3e-9],\"covariance\":[9e-22]},"
+            + "\"entered\":{\"text\":\"100.02147\",\"unit\":\"g\",\"si\":0.10002147,\"uncertainty\":{\"si\":3.5e-7}}}";
 
     private final DetachedRecords records = new DetachedRecords(new OfferingKind(), new StatementKind());
     private Hash of = Hash.of(new byte[0]);
@@ -73,7 +80,16 @@ class StatementKindTest {
         "/answer, 0.10002, kg, significant, 5, none",
         "/estimates/first, 0.50(1), 1, uncertainty-digits, 1, combined",
         "/estimates/second, 0.250(20), 1, uncertainty-digits, 2, combined",
-        "/plain, 0.12, 1, decimals, 2, none"
+        "/plain, 0.12, 1, decimals, 2, none",
+        "/apart, 2.00(5), nm, uncertainty-digits, 1, combined",
+        "/apart, 2.00(3), nm, uncertainty-digits, 1, statistical",
+        "/apart, 2.00(4), nm, uncertainty-digits, 1, shared",
+        "/list/estimates/length, 2.00(5), nm, uncertainty-digits, 1, combined",
+        "/list/estimates/length, 2.00(3), nm, uncertainty-digits, 1, statistical",
+        "/list/estimates/length, 2.00(4), nm, uncertainty-digits, 1, shared",
+        "/list/estimates/visibility, 50(1), %, uncertainty-digits, 1, combined",
+        "/rival/estimates/length, 3.00(3), nm, uncertainty-digits, 1, statistical",
+        "/entered, 100.0, g, decimals, 1, none"
     })
     void whatIsTheRoundingOfTheValueIsAccepted(
             String pointer, String printed, String unit, String sort, int digits, String which) {
@@ -90,7 +106,14 @@ class StatementKindTest {
         "/mass, 100.02148(35), g, uncertainty-digits, 2, combined, statement.not-rounded, /content/printed",
         "/mass, 100.02147(34), g, uncertainty-digits, 2, combined, statement.not-rounded, /content/printed",
         "/answer, 100.02147(35), g, uncertainty-digits, 2, statistical, statement.not-rounded, /content/printed",
-        "/plain, 0.13, 1, decimals, 2, none, statement.not-rounded, /content/printed"
+        "/plain, 0.13, 1, decimals, 2, none, statement.not-rounded, /content/printed",
+        "/list/estimates/length, 2.00(3), nm, uncertainty-digits, 1, combined, statement.not-rounded, /content/printed",
+        "/rival/estimates/length, 3.00(3), nm, uncertainty-digits, 1, combined, statement.no-uncertainty, /content/rounding",
+        "/rival/estimates/length, 3.00(3), nm, decimals, 2, shared, statement.no-uncertainty, /content/uncertainty",
+        "/apart, 2.00(5), nm, decimals, 2, none, statement.no-uncertainty, /content/uncertainty",
+        "/list/estimates/length, 2.00(5), W, uncertainty-digits, 1, combined, statement.unit, /content/unit",
+        "/list/estimates/visibility, 0.50(1), m, uncertainty-digits, 1, combined, statement.unit, /content/unit",
+        "/entered, 100.0, mm, decimals, 1, none, statement.unit, /content/unit"
     })
     void whatIsNotIsRefusedWithPlaceAndMend(
             String pointer,

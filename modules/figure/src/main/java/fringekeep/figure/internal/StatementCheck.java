@@ -1,9 +1,7 @@
 package fringekeep.figure.internal;
 
-import fringekeep.archive.json.Json;
-import fringekeep.archive.json.JsonArray;
-import fringekeep.archive.json.JsonNumber;
 import fringekeep.archive.json.JsonObject;
+import fringekeep.archive.kind.Input;
 import fringekeep.archive.kind.RecordView;
 import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
@@ -17,13 +15,10 @@ import java.util.OptionalDouble;
 public final class StatementCheck {
     private StatementCheck() {}
 
-    /** What a statement points to, SI. */
-    private record Value(double value, OptionalDouble combined, OptionalDouble statistical) {}
-
     /** All that is wrong with a statement about a record. */
-    public static List<Problem> problems(JsonObject content, RecordView record) {
+    public static List<Problem> problems(JsonObject content, RecordView record, Input input) {
         String pointer = content.text("pointer").orElse("");
-        Optional<Value> value = value(record.result(), pointer).or(() -> value(record.content(), pointer));
+        Optional<PointedValue> value = PointedValue.find(record, input, pointer);
         if (value.isEmpty()) {
             return List.of(new Problem(
                     "statement.no-value",
@@ -49,15 +44,29 @@ public final class StatementCheck {
         }
     }
 
-    private static List<Problem> compare(JsonObject content, Value value, Rounding.Printed printed)
+    /** A printed 17 mm for a volume is no rounding of anything. */
+    private static Optional<Problem> unit(Unit printed, String code, PointedValue value) throws ProblemException {
+        if (value.unit().isEmpty() || Units.parse(value.unit().get()).sameDimension(printed)) {
+            return Optional.empty();
+        }
+        return Optional.of(new Problem(
+                "statement.unit",
+                "The value is in " + value.unit().get() + ", which " + code + " does not measure.",
+                "/content/unit",
+                "Give the unit that is printed, of the dimension of "
+                        + value.unit().get() + "."));
+    }
+
+    private static List<Problem> compare(JsonObject content, PointedValue value, Rounding.Printed printed)
             throws ProblemException {
-        Unit unit = Units.parse(content.text("unit").orElse("1"));
-        OptionalDouble si =
-                switch (content.text("uncertainty").orElse("combined")) {
-                    case "none" -> OptionalDouble.empty();
-                    case "statistical" -> value.statistical();
-                    default -> value.combined();
-                };
+        String code = content.text("unit").orElse("1");
+        Unit unit = Units.parse(code);
+        Optional<Problem> dimension = unit(unit, code, value);
+        if (dimension.isPresent()) {
+            return List.of(dimension.get());
+        }
+        String which = content.text("uncertainty").orElse("combined");
+        OptionalDouble si = value.deviation(which);
         OptionalDouble deviation =
                 si.isPresent() ? OptionalDouble.of(unit.differenceFromSi(si.getAsDouble())) : OptionalDouble.empty();
         Optional<Rounding.Printed> right =
@@ -65,9 +74,18 @@ public final class StatementCheck {
         if (right.isEmpty()) {
             return List.of(new Problem(
                     "statement.no-uncertainty",
-                    "The rule rounds by the uncertainty, but the value has none.",
+                    "The rule rounds by the uncertainty, but the value has no " + which + " uncertainty.",
                     "/content/rounding",
-                    "Round to decimals or significant digits instead."));
+                    "Round to decimals or significant digits instead, or name an uncertainty the value has."));
+        }
+        if (printed.deviation().isPresent() && right.get().deviation().isEmpty()) {
+            return List.of(new Problem(
+                    "statement.no-uncertainty",
+                    which.equals("none")
+                            ? "An uncertainty is printed although none is said to be."
+                            : "An uncertainty is printed, but the value has no " + which + " uncertainty.",
+                    "/content/uncertainty",
+                    "Say which uncertainty of the value is printed: combined, statistical or shared."));
         }
         boolean same = right.get().value().compareTo(printed.value()) == 0
                 && (printed.deviation().isEmpty()
@@ -89,66 +107,5 @@ public final class StatementCheck {
                                         .orElse("") + ".",
                         "/content/printed",
                         "Print that, or state another rule."));
-    }
-
-    private static Optional<Value> value(JsonObject part, String pointer) {
-        Json here = part;
-        String[] steps = pointer.substring(pointer.isEmpty() ? 0 : 1).split("/");
-        for (int i = 0; i < steps.length; i++) {
-            if (steps[i].equals("estimates") && i == steps.length - 2 && here instanceof JsonObject list) {
-                return listed(list, steps[i + 1]);
-            }
-            Optional<Json> next = step(here, steps[i]);
-            if (next.isEmpty()) {
-                return Optional.empty();
-            }
-            here = next.get();
-        }
-        return single(here);
-    }
-
-    private static Optional<Json> step(Json here, String step) {
-        if (here instanceof JsonObject object) {
-            return object.get(step.replace("~1", "/").replace("~0", "~"));
-        }
-        boolean index = here instanceof JsonArray && step.matches("[0-9]{1,6}");
-        if (index
-                && here instanceof JsonArray array
-                && Integer.parseInt(step) < array.items().size()) {
-            return Optional.of(array.items().get(Integer.parseInt(step)));
-        }
-        return Optional.empty();
-    }
-
-    private static Optional<Value> single(Json here) {
-        if (here instanceof JsonNumber number) {
-            return Optional.of(new Value(number.value(), OptionalDouble.empty(), OptionalDouble.empty()));
-        }
-        if (here instanceof JsonObject object && object.number("value").isPresent()) {
-            return Optional.of(
-                    new Value(object.number("value").getAsDouble(), object.number("u"), statistical(object)));
-        }
-        if (here instanceof JsonObject object && object.number("si").isPresent()) {
-            OptionalDouble u =
-                    object.object("uncertainty").map(sort -> sort.number("si")).orElse(OptionalDouble.empty());
-            return Optional.of(new Value(object.number("si").getAsDouble(), u, u));
-        }
-        return Optional.empty();
-    }
-
-    private static OptionalDouble statistical(JsonObject estimate) {
-        return estimate.number("statistical").isPresent() ? estimate.number("statistical") : estimate.number("u");
-    }
-
-    private static Optional<Value> listed(JsonObject list, String name) {
-        JsonArray names = list.array("estimates");
-        for (int i = 0; i < names.items().size(); i++) {
-            if (names.items().get(i).equals(Json.of(name))) {
-                double[] covariance = list.array("covariance").numbers();
-                OptionalDouble u = OptionalDouble.of(Math.sqrt(covariance[i * (i + 1) / 2 + i]));
-                return Optional.of(new Value(list.array("values").numbers()[i], u, u));
-            }
-        }
-        return Optional.empty();
     }
 }
