@@ -33,8 +33,11 @@ import javax.swing.KeyStroke;
 public final class PictureView extends JComponent {
     private final transient Supplier<Theme> theme;
     private final transient Consumer<Picture> save;
-    private final transient Picture whole;
+    private transient Picture whole;
     private transient Picture shown;
+    private transient Optional<Hands> hands = Optional.empty();
+    private boolean held;
+    private boolean zoomed;
     private transient List<Frame> frames = List.of();
     private transient Readout readout;
     private transient Consumer<String> listener = words -> {};
@@ -61,6 +64,84 @@ public final class PictureView extends JComponent {
         Mouse mouse = new Mouse();
         addMouseListener(mouse);
         addMouseMotionListener(mouse);
+    }
+
+    /** Something more to do with the picture than to look at it. */
+    public interface Hands {
+        /**
+         * The mouse went down.
+         *
+         * @return whether what follows is for these hands; if not, dragging zooms and a click reads out as ever
+         */
+        boolean down(MouseEvent event);
+
+        /** The mouse moves while down. */
+        void drag(MouseEvent event);
+
+        /** The mouse is up again. */
+        void up(MouseEvent event);
+
+        /** Draws over the picture. */
+        void over(Graphics2D g, Theme colours);
+    }
+
+    /**
+     * The point that is read out.
+     *
+     * @param panel place of its panel in the picture
+     * @param layer place of its layer in the panel
+     * @param point place of it in the layer
+     */
+    public record Picked(int panel, int layer, int point) {}
+
+    /** Gives the view hands. */
+    public void hands(Hands next) {
+        hands = Optional.of(next);
+    }
+
+    /** The point that is read out, where one is. */
+    public Optional<Picked> picked() {
+        return readout.spot().map(spot -> new Picked(spot.panel(), spot.layer(), spot.point()));
+    }
+
+    /** The point nearest to a place, within twelve units. */
+    public Optional<Picked> near(int px, int py) {
+        return readout.nearest(frames, px, py, 12)
+                .spot()
+                .map(spot -> new Picked(spot.panel(), spot.layer(), spot.point()));
+    }
+
+    /** Shows another picture of the same panels, zoomed as before; what was read out stays read where it still is. */
+    public void show(Picture next) {
+        boolean as = zoomed && next.panels().size() == whole.panels().size();
+        Picture before = shown;
+        Optional<Readout.Spot> read = readout.spot();
+        whole = next;
+        shown = next;
+        zoomed = as;
+        if (as) {
+            for (int i = 0; i < next.panels().size(); i++) {
+                shown = Zoom.as(shown, i, before.panels().get(i));
+            }
+        }
+        readout = Readout.of(next).at(read);
+        getAccessibleContext().setAccessibleName(accessibleName(next));
+        repaint();
+    }
+
+    /** The rectangle between the axes of a panel as last painted; empty before the first painting. */
+    public Optional<Rectangle2D> plot(int panel) {
+        return panel < frames.size() ? Optional.of(frames.get(panel).plot()) : Optional.empty();
+    }
+
+    /** The abscissa at a place from the left, as last painted (unit of the axis); 0 before the first painting. */
+    public double abscissa(int panel, double px) {
+        return panel < frames.size() ? frames.get(panel).x().value(px) : 0;
+    }
+
+    /** The place from the left of an abscissa, as last painted; 0 before the first painting. */
+    public double placeOf(int panel, double abscissa) {
+        return panel < frames.size() ? frames.get(panel).x().placeNear(abscissa) : 0;
     }
 
     /** Tells a listener what is read out, empty when nothing is. */
@@ -93,6 +174,7 @@ public final class PictureView extends JComponent {
         Graphics2D g = (Graphics2D) graphics.create();
         Theme colours = theme.get();
         frames = new PicturePainter(g, colours, Measures.SCREEN).paint(shown, getWidth(), getHeight());
+        hands.ifPresent(each -> each.over(g, colours));
         readout.spot().ifPresent(spot -> cross(g, spot, colours));
         g.setColor(colours.color(Tone.QUANTUM));
         g.setStroke(new BasicStroke(1));
@@ -190,12 +272,14 @@ public final class PictureView extends JComponent {
                 .map(spot -> frame.x().place(spot.x()))
                 .orElse(frame.plot().getCenterX());
         shown = Zoom.by(shown, frames, panel, factor, about);
+        zoomed = true;
         repaint();
     }
 
     /** Shows all again. */
     public void showAll() {
         shown = whole;
+        zoomed = false;
         repaint();
     }
 
@@ -221,18 +305,31 @@ public final class PictureView extends JComponent {
         @Override
         public void mousePressed(MouseEvent event) {
             requestFocusInWindow();
+            held = hands.isPresent() && hands.get().down(event);
+            if (held) {
+                return;
+            }
             dragFrom = Optional.of(event.getPoint());
             dragTo = Optional.empty();
         }
 
         @Override
         public void mouseDragged(MouseEvent event) {
+            if (held) {
+                hands.ifPresent(each -> each.drag(event));
+                return;
+            }
             dragTo = Optional.of(event.getPoint());
             repaint();
         }
 
         @Override
         public void mouseReleased(MouseEvent event) {
+            if (held) {
+                held = false;
+                hands.ifPresent(each -> each.up(event));
+                return;
+            }
             Optional<Rectangle2D> area = dragged();
             dragFrom = Optional.empty();
             dragTo = Optional.empty();
@@ -248,6 +345,7 @@ public final class PictureView extends JComponent {
                 Frame frame = frames.get(i);
                 Rectangle2D part = area.createIntersection(frame.plot());
                 if (part.getWidth() > 5 && part.getHeight() > 5) {
+                    zoomed = true;
                     shown = Zoom.to(
                             shown,
                             i,

@@ -12,7 +12,7 @@ import java.util.Optional;
  */
 record Readout(List<Spot> spots, int at) {
     /** One point that can be read out. */
-    record Spot(int panel, int layer, double x, double y, String words) {}
+    record Spot(int panel, int layer, int point, double x, double y, String words) {}
 
     static Readout of(Picture picture) {
         List<Spot> spots = new ArrayList<>();
@@ -35,7 +35,7 @@ record Readout(List<Spot> spots, int at) {
         for (int i = 0; i < xs.length; i++) {
             if (Double.isFinite(xs[i]) && Double.isFinite(ys[i])) {
                 double deviation = i < deviations.length ? deviations[i] : 0;
-                spots.add(new Spot(p, l, xs[i], ys[i], words(panel, i, xs[i], ys[i], deviation)));
+                spots.add(new Spot(p, l, i, xs[i], ys[i], words(panel, i, xs[i], ys[i], deviation)));
             }
         }
     }
@@ -48,6 +48,16 @@ record Readout(List<Spot> spots, int at) {
     private static String side(Axis axis, String otherwise, String value) {
         String label = axis.label().isEmpty() ? otherwise : axis.label();
         return label + " " + value + (axis.unit().isEmpty() ? "" : " " + axis.unit());
+    }
+
+    /** The same point as before: that of its panel with its abscissa, else none. */
+    Readout at(Optional<Spot> before) {
+        for (int i = 0; i < spots.size() && before.isPresent(); i++) {
+            if (spots.get(i).panel == before.get().panel && spots.get(i).x == before.get().x) {
+                return new Readout(spots, i);
+            }
+        }
+        return new Readout(spots, -1);
     }
 
     /** The next or previous point, staying at the ends. */

@@ -22,6 +22,22 @@ final class Zoom {
                 picture.title(), picture.widthMillimetres(), picture.heightMillimetres(), picture.columns(), panels);
     }
 
+    /** The picture with the axes of one panel as they were in another picture of the same panels. */
+    static Picture as(Picture picture, int panel, Panel before) {
+        List<Panel> panels = new ArrayList<>(picture.panels());
+        Panel each = panels.get(panel);
+        Axis x = ranged(each.x(), before.x());
+        Axis y = panel == 0 ? ranged(each.y(), before.y()) : each.y();
+        panels.set(
+                panel, new Panel(each.name(), each.heading(), x, y, each.layers(), each.heightShare(), each.legend()));
+        return new Picture(
+                picture.title(), picture.widthMillimetres(), picture.heightMillimetres(), picture.columns(), panels);
+    }
+
+    private static Axis ranged(Axis axis, Axis before) {
+        return new Axis(axis.label(), axis.unit(), axis.logarithmic(), before.from(), before.to());
+    }
+
     /** The picture with a panel's abscissae scaled about a place of the page; less than 1 zooms in. */
     static Picture by(Picture picture, List<Frame> frames, int panel, double factor, double px) {
         Frame frame = frames.get(panel);

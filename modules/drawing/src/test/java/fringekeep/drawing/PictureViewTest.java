@@ -2,7 +2,9 @@ package fringekeep.drawing;
 
 import static org.assertj.core.api.Assertions.assertThat;
 
+import java.awt.Graphics2D;
 import java.awt.event.ActionEvent;
+import java.awt.event.MouseEvent;
 import java.awt.image.BufferedImage;
 import java.util.ArrayList;
 import java.util.List;
@@ -43,6 +45,67 @@ class PictureViewTest {
         press("ctrl S");
 
         assertThat(saved).containsExactly(view.shown());
+    }
+
+    @Test
+    void anotherPictureKeepsTheZoomAndThePointThatIsRead() {
+        paint();
+        press("RIGHT");
+        press("RIGHT");
+        press("EQUALS");
+        Axis zoomed = view.shown().panels().get(0).x();
+
+        view.show(Samples.fringe());
+
+        assertThat(view.shown().panels().get(0).x()).isEqualTo(zoomed);
+        assertThat(view.picked())
+                .contains(new PictureView.Picked(0, view.picked().orElseThrow().layer(), 1));
+        press("0");
+        assertThat(view.shown()).isSameAs(view.picture());
+    }
+
+    @Test
+    void handsTakeADragThatWouldZoom() {
+        List<String> seen = new ArrayList<>();
+        view.hands(new PictureView.Hands() {
+            @Override
+            public boolean down(MouseEvent event) {
+                seen.add("down");
+                return event.getX() > 300;
+            }
+
+            @Override
+            public void drag(MouseEvent event) {
+                seen.add("drag " + Math.rint(view.abscissa(0, event.getX())));
+            }
+
+            @Override
+            public void up(MouseEvent event) {
+                seen.add("up");
+            }
+
+            @Override
+            public void over(Graphics2D g, Theme colours) {}
+        });
+        paint();
+        double at = view.abscissa(0, 400);
+
+        mouse(MouseEvent.MOUSE_PRESSED, 350, 200);
+        mouse(MouseEvent.MOUSE_DRAGGED, 400, 250);
+        mouse(MouseEvent.MOUSE_RELEASED, 400, 250);
+
+        assertThat(seen).containsExactly("down", "drag " + Math.rint(at), "up");
+        assertThat(view.shown()).isSameAs(view.picture());
+        assertThat(view.placeOf(0, at)).isCloseTo(400, org.assertj.core.data.Offset.offset(1e-6));
+
+        mouse(MouseEvent.MOUSE_PRESSED, 150, 100);
+        mouse(MouseEvent.MOUSE_DRAGGED, 250, 200);
+        mouse(MouseEvent.MOUSE_RELEASED, 250, 200);
+        assertThat(view.shown()).isNotSameAs(view.picture());
+    }
+
+    private void mouse(int id, int x, int y) {
+        view.dispatchEvent(new MouseEvent(view, id, 0, 0, x, y, 1, false, MouseEvent.BUTTON1));
     }
 
     @Test
