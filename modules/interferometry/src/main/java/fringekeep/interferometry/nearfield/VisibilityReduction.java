@@ -91,6 +91,22 @@ public final class VisibilityReduction {
     }
 
     /**
+     * Unequal flight times between the gratings: a molecule of transverse velocity v moves the fringe by v &tau;.
+     *
+     * <p>Source: the average of exp(2 &pi; i v &tau; / d) over normal velocities; with pulsed gratings the first grating must
+     * carry no phase for this to be all (otherwise the whole fringe is to be computed).
+     *
+     * @param deviation standard deviation of the transverse velocities (m/s), &ge; 0
+     * @param mismatch &tau;, second less first flight time (s)
+     * @param period fringe period d (m), &gt; 0
+     * @return visibility left, exp(&minus;2 &pi;&sup2; &sigma;&sup2; &tau;&sup2; / d&sup2;)
+     */
+    public static double timeMismatch(double deviation, double mismatch, double period) {
+        double turns = deviation * mismatch / period;
+        return StrictMath.exp(-2.0 * Math.PI * Math.PI * turns * turns);
+    }
+
+    /**
      * Phase by a constant acceleration along the grating vector.
      *
      * @param acceleration component along x (m/s^2): g times the sine of the gratings' tilt
