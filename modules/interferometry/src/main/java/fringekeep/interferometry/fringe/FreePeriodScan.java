@@ -4,8 +4,9 @@ import fringekeep.interferometry.statistics.SymmetricMatrix;
 import java.util.Arrays;
 
 /**
- * The fast way for many scans over one grid with the period free, by unweighted Gauss&ndash;Newton steps with halving;
- * with or without a linear drift. Results agree with {@link FringeFitter} to about 1e-9 standard errors.
+ * A fast way for many scans over one grid with the period free, by unweighted Gauss&ndash;Newton steps with halving;
+ * with or without a linear drift. Results agree with {@link FringeFitter} to about 1e-9 standard errors; without a drift
+ * that one is faster, with one this is.
  *
  * <p>A result holds mean, cosine, sine, [drift], period, then their expected covariance as lower triangle by rows. A workspace:
  * one thread at a time.

@@ -1,6 +1,7 @@
 package fringekeep.interferometry.molecule;
 
 import fringekeep.interferometry.statistics.SymmetricMatrix;
+import java.util.Arrays;
 import java.util.Optional;
 
 /**
@@ -9,7 +10,8 @@ import java.util.Optional;
  *
  * <p>Beside the general {@link fringekeep.interferometry.statistics.CurveFitter} because a visibility |S_1| has a kink
  * wherever the fringe changes sign: there the general fitter rightly refuses, this one stops at the kink and says so. It
- * also keeps its arrays, which makes a bootstrap of thousands of fits a matter of milliseconds.
+ * also keeps its arrays and the curve at the start, which makes a bootstrap of thousands of fits a matter of milliseconds.
+ * A workspace: one thread at a time.
  *
  * <p>Source: D. W. Marquardt, J. Soc. Indust. Appl. Math. 11, 431 (1963), with the diagonal as scale.
  */
@@ -20,36 +22,72 @@ final class KinkedCurveFitter {
     private static final double LARGEST_DAMPING = 1e12;
 
     private final CurveModel model;
-    private final MeasuredCurve data;
     private final int count;
+    private final double[] observed;
+    private final double[] uncertainties;
+    private final double[] weights;
     private final double[] values;
+    private final double[] pulls;
     private final double[][] jacobian;
     private final double[] scale;
     private final double[] gradient;
     private final double[] normal;
+    private final double[] factors;
+    private final double[] step;
+    private final Start start = new Start();
+    /** Where values and slopes were computed last; an array that is not written to afterwards. */
+    private double[] evaluatedAt = new double[0];
     /** Fall of the sum of squares that the last step promised if the model were linear. */
     private double promised;
 
     KinkedCurveFitter(CurveModel model, MeasuredCurve data) {
+        int points = data.size();
         this.model = model;
-        this.data = data;
         this.count = model.parameters();
-        this.values = new double[data.size()];
-        this.jacobian = new double[data.size()][count];
+        this.observed = new double[points];
+        this.uncertainties = new double[points];
+        this.weights = new double[points];
+        for (int k = 0; k < points; k++) {
+            observed[k] = data.value(k);
+            uncertainties[k] = data.uncertainty(k);
+            weights[k] = 1.0 / uncertainties[k];
+        }
+        this.values = new double[points];
+        this.pulls = new double[points];
+        this.jacobian = new double[points][count];
         this.scale = new double[count];
         this.gradient = new double[count];
         this.normal = new double[count * (count + 1) / 2];
+        this.factors = new double[normal.length];
+        this.step = new double[count];
+    }
+
+    /** Puts other values in the place of the measured ones, for resampling. */
+    void observe(double[] others) {
+        System.arraycopy(others, 0, observed, 0, observed.length);
     }
 
     /** Where the iteration ended; smooth is false if it stopped at a kink of the model. */
     record Minimum(double[] parameters, double chiSquare, boolean smooth) {}
 
     /** Finds the minimum next to a start; empty if the steps come to no end or a parameter has no effect. */
-    Optional<Minimum> minimum(double[] start) {
-        double[] here = start.clone();
-        double chiSquare = evaluate(here);
+    Optional<Minimum> minimum(double[] from) {
+        return end(from).map(end -> new Minimum(end.place, square(end.place), end.smooth));
+    }
+
+    /** The place of the minimum alone. */
+    Optional<double[]> place(double[] from) {
+        return end(from).map(End::place);
+    }
+
+    private record End(double[] place, boolean smooth) {}
+
+    private Optional<End> end(double[] from) {
+        double[] here = from.clone();
+        start.visit(here);
+        double chiSquare = square(here);
         double damping = 1e-3;
-        for (int step = 0; step < MAXIMUM_STEPS; step++) {
+        for (int round = 0; round < MAXIMUM_STEPS; round++) {
             if (!Double.isFinite(chiSquare) || !assemble()) {
                 return Optional.empty();
             }
@@ -60,25 +98,25 @@ final class KinkedCurveFitter {
             while (!better && damping < LARGEST_DAMPING) {
                 double[] trial = here.clone();
                 length = move(trial, damping);
-                double trialSquare = evaluate(trial);
+                double trialSquare = square(trial);
                 better = trialSquare < before;
                 if (better) {
                     next = trial;
                     chiSquare = trialSquare;
                     damping = adjusted(damping, (before - trialSquare) / promised);
                 } else if (length < FINISHED) {
-                    return Optional.of(polished(here));
+                    return Optional.of(new End(polished(here), true));
                 } else {
                     damping *= 10.0;
                 }
             }
             if (!better) {
-                return Optional.of(new Minimum(here, before, false));
+                return Optional.of(new End(here, false));
             }
             // The accepted trial was the last point evaluated, so its slopes are at hand for the next step.
             here = next;
             if (length < FINISHED) {
-                return Optional.of(polished(here));
+                return Optional.of(new End(polished(here), true));
             }
         }
         return Optional.empty();
@@ -93,10 +131,10 @@ final class KinkedCurveFitter {
     }
 
     /** Undamped steps while they stay small: they reach the root of the gradient to rounding. */
-    private Minimum polished(double[] here) {
+    private double[] polished(double[] here) {
         double[] polished = here;
         double shortest = 1e-3;
-        for (int step = 0; step < 4; step++) {
+        for (int round = 0; round < 4; round++) {
             evaluate(polished);
             double[] trial = polished.clone();
             double length = assemble() ? move(trial, 0.0) : Double.POSITIVE_INFINITY;
@@ -109,7 +147,7 @@ final class KinkedCurveFitter {
                 break;
             }
         }
-        return new Minimum(polished, evaluate(polished), true);
+        return polished;
     }
 
     /** Covariance at a point, packed; empty if the data leave a combination of parameters open. */
@@ -118,7 +156,7 @@ final class KinkedCurveFitter {
         if (!assemble()) {
             return Optional.empty();
         }
-        double[] factors = normal.clone();
+        System.arraycopy(normal, 0, factors, 0, normal.length);
         if (!SymmetricMatrix.factor(factors, count, SMALLEST_PIVOT)) {
             return Optional.empty();
         }
@@ -133,27 +171,66 @@ final class KinkedCurveFitter {
 
     /** The curve at a point. */
     double[] curve(double[] at) {
-        model.evaluate(at, values, jacobian);
+        evaluate(at);
         return values.clone();
     }
 
-    private double evaluate(double[] at) {
-        model.evaluate(at, values, jacobian);
-        double sum = 0.0;
+    private void evaluate(double[] at) {
+        if (!Arrays.equals(at, evaluatedAt)) {
+            model.evaluate(at, values, jacobian);
+            evaluatedAt = at;
+        }
+    }
+
+    /** The sum of weighted squares at a place that is not written to afterwards. */
+    private double square(double[] at) {
+        evaluate(at);
         for (int k = 0; k < values.length; k++) {
-            double pull = (data.value(k) - values[k]) / data.uncertainty(k);
+            pulls[k] = (observed[k] - values[k]) / uncertainties[k];
+        }
+        double sum = 0.0;
+        for (double pull : pulls) {
             sum = Math.fma(pull, pull, sum);
         }
         return sum;
     }
 
+    /** Curve and slopes at the last start: thousands of resamples begin at one place. */
+    private final class Start {
+        private double[] place = new double[0];
+        private double[] curve = new double[0];
+        private double[][] slopes = new double[0][];
+
+        void visit(double[] here) {
+            if (Arrays.equals(here, place)) {
+                System.arraycopy(curve, 0, values, 0, values.length);
+                for (int k = 0; k < slopes.length; k++) {
+                    System.arraycopy(slopes[k], 0, jacobian[k], 0, count);
+                }
+                evaluatedAt = here;
+                return;
+            }
+            evaluate(here);
+            place = here;
+            curve = values.clone();
+            slopes = new double[jacobian.length][];
+            for (int k = 0; k < slopes.length; k++) {
+                slopes[k] = jacobian[k].clone();
+            }
+        }
+    }
+
     /** Normal equations scaled to a unit diagonal; false if a parameter has no effect. */
     private boolean assemble() {
-        java.util.Arrays.fill(gradient, 0.0);
-        java.util.Arrays.fill(normal, 0.0);
+        if (count == 1) {
+            assembleOne();
+            return rescale();
+        }
+        Arrays.fill(gradient, 0.0);
+        Arrays.fill(normal, 0.0);
         for (int k = 0; k < values.length; k++) {
-            double weight = 1.0 / data.uncertainty(k);
-            double pull = (data.value(k) - values[k]) * weight;
+            double weight = weights[k];
+            double pull = (observed[k] - values[k]) * weight;
             for (int i = 0; i < count; i++) {
                 double slope = jacobian[k][i] * weight;
                 gradient[i] = Math.fma(slope, pull, gradient[i]);
@@ -164,6 +241,18 @@ final class KinkedCurveFitter {
             }
         }
         return rescale();
+    }
+
+    private void assembleOne() {
+        double pulled = 0.0;
+        double squared = 0.0;
+        for (int k = 0; k < values.length; k++) {
+            double slope = jacobian[k][0] * weights[k];
+            pulled = Math.fma(slope, (observed[k] - values[k]) * weights[k], pulled);
+            squared = Math.fma(slope, slope, squared);
+        }
+        gradient[0] = pulled;
+        normal[0] = squared;
     }
 
     private boolean rescale() {
@@ -184,14 +273,14 @@ final class KinkedCurveFitter {
 
     /** Moves by one damped step and returns its length in scaled parameters (about standard uncertainties). */
     private double move(double[] parameters, double damping) {
-        double[] factors = normal.clone();
+        System.arraycopy(normal, 0, factors, 0, normal.length);
         for (int i = 0; i < count; i++) {
             factors[SymmetricMatrix.at(i, i)] += damping;
         }
         if (!SymmetricMatrix.factor(factors, count, 1e-15)) {
             return Double.POSITIVE_INFINITY;
         }
-        double[] step = gradient.clone();
+        System.arraycopy(gradient, 0, step, 0, count);
         SymmetricMatrix.solve(factors, count, step);
         double longest = 0.0;
         promised = 0.0;

@@ -68,15 +68,20 @@ public record PowerCurveIntervals(
             throw new IllegalArgumentException("a bootstrap needs at least 100 resamples, not " + resamples);
         }
         PowerCurveModel model = fitter.near(data, description, fit.values());
+        KinkedCurveFitter solver = new KinkedCurveFitter(model, model.data());
         SplitMix64 random = new SplitMix64(seed);
+        double[] start = fit.values();
+        double[] fitted = fit.fitted();
+        double[] sample = new double[fitted.length];
         double[][] found = new double[fit.parameters().size()][resamples];
         int good = 0;
         for (int r = 0; r < resamples; r++) {
-            MeasuredCurve sample = resampled(model.data(), random);
-            Optional<KinkedCurveFitter.Minimum> minimum = new KinkedCurveFitter(model, sample).minimum(fit.values());
-            if (minimum.isPresent()) {
+            resample(model.data(), fitted, random, sample);
+            solver.observe(sample);
+            Optional<double[]> place = solver.place(start);
+            if (place.isPresent()) {
                 for (int k = 0; k < found.length; k++) {
-                    found[k][good] = minimum.get().parameters()[k];
+                    found[k][good] = place.get()[k];
                 }
                 good++;
             }
@@ -84,12 +89,10 @@ public record PowerCurveIntervals(
         return summary(seed, resamples, found, good);
     }
 
-    private MeasuredCurve resampled(MeasuredCurve curve, SplitMix64 random) {
-        double[] values = fit.fitted();
-        for (int k = 0; k < values.length; k++) {
-            values[k] = Math.fma(curve.uncertainty(k), random.nextGaussian(), values[k]);
+    private static void resample(MeasuredCurve curve, double[] fitted, SplitMix64 random, double[] sample) {
+        for (int k = 0; k < fitted.length; k++) {
+            sample[k] = Math.fma(curve.uncertainty(k), random.nextGaussian(), fitted[k]);
         }
-        return curve.withValues(values);
     }
 
     private static Bootstrap summary(long seed, int resamples, double[][] found, int good) {

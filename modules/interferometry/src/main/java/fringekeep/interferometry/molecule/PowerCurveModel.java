@@ -9,19 +9,28 @@ import java.util.function.DoubleUnaryOperator;
 
 /**
  * V(P) = factor |2 S_1/S_0| for the solver: parameters are the polarizability volume, then, where free, cross section
- * and factor. A known polarizability is one more point of the data.
+ * and factor. A known polarizability is one more point of the data. A workspace: one thread at a time.
  */
 final class PowerCurveModel implements CurveModel {
     private final VisibilityAgainstPower model;
     private final PowerCurveChoices choices;
     private final MeasuredCurve data;
     private final int points;
+    private final double[] powers;
+    private final double[] signed;
+    private final double[] slopes;
 
     PowerCurveModel(VisibilityAgainstPower model, PowerCurveChoices choices, MeasuredCurve measured) {
         this.model = model;
         this.choices = choices;
         this.points = measured.size();
         this.data = choices.known().map(known -> extended(measured, known)).orElse(measured);
+        this.powers = new double[points];
+        for (int k = 0; k < points; k++) {
+            powers[k] = measured.place(k);
+        }
+        this.signed = new double[points];
+        this.slopes = new double[points];
     }
 
     private static MeasuredCurve extended(MeasuredCurve measured, Estimate known) {
@@ -79,12 +88,35 @@ final class PowerCurveModel implements CurveModel {
 
     @Override
     public void evaluate(double[] parameters, double[] values, double[][] jacobian) {
+        if (phaseOnly()) {
+            evaluatePhaseOnly(parameters, values, jacobian);
+        } else {
+            evaluateAbsorbing(parameters, values, jacobian);
+        }
+        if (data.size() > points) {
+            values[points] = parameters[0];
+            jacobian[points][0] = 1.0;
+        }
+    }
+
+    private void evaluatePhaseOnly(double[] parameters, double[] values, double[][] jacobian) {
+        double factor = factor(parameters);
+        model.phaseOnlyCurve(powers, parameters[0], signed, slopes);
+        for (int k = 0; k < points; k++) {
+            double sign = signed[k] < 0.0 ? -1.0 : 1.0;
+            values[k] = factor * sign * signed[k];
+            jacobian[k][0] = factor * sign * slopes[k];
+            if (choices.fitFactor()) {
+                jacobian[k][1] = sign * signed[k];
+            }
+        }
+    }
+
+    private void evaluateAbsorbing(double[] parameters, double[] values, double[][] jacobian) {
         double factor = factor(parameters);
         OpticalResponse response = new OpticalResponse(parameters[0], crossSection(parameters));
         for (int k = 0; k < points; k++) {
-            VisibilityAgainstPower.Point point = phaseOnly()
-                    ? model.phaseOnlyPoint(data.place(k), parameters[0])
-                    : model.point(data.place(k), response);
+            VisibilityAgainstPower.Point point = model.point(powers[k], response);
             double sign = point.signed() < 0.0 ? -1.0 : 1.0;
             values[k] = factor * sign * point.signed();
             jacobian[k][0] = factor * sign * point.byPolarizability();
@@ -94,10 +126,6 @@ final class PowerCurveModel implements CurveModel {
             if (choices.fitFactor()) {
                 jacobian[k][parameters.length - 1] = sign * point.signed();
             }
-        }
-        if (data.size() > points) {
-            values[points] = parameters[0];
-            jacobian[points][0] = 1.0;
         }
     }
 

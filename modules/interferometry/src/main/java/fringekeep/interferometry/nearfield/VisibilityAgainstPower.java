@@ -4,8 +4,9 @@ import fringekeep.interferometry.special.Bessel;
 import fringekeep.interferometry.special.CosineSineKernel;
 import fringekeep.interferometry.special.HalfTurn;
 import fringekeep.interferometry.special.PiecewisePolynomial;
-import java.util.Optional;
+import fringekeep.interferometry.special.PolynomialOnDemand;
 import java.util.function.DoubleUnaryOperator;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Visibility of a slit - light - slit interferometer as a function of laser power, averaged over speed, mass and
@@ -33,7 +34,7 @@ public final class VisibilityAgainstPower {
     private final double[] even;
     private final double largestOdd;
     private final boolean reflectionIsPerfect;
-    private final Optional<PiecewisePolynomial> table;
+    private final @Nullable PolynomialOnDemand table;
 
     /**
      * Fixes the set-up, the beam and the description.
@@ -50,11 +51,11 @@ public final class VisibilityAgainstPower {
         this.odd = nodes.odd;
         this.even = nodes.even;
         this.largestOdd = nodes.largestOdd();
-        this.table = Optional.empty();
+        this.table = null;
         this.reflectionIsPerfect = setup.laser().reflectivity() == 1.0;
     }
 
-    private VisibilityAgainstPower(VisibilityAgainstPower model, PiecewisePolynomial table) {
+    private VisibilityAgainstPower(VisibilityAgainstPower model, PolynomialOnDemand table) {
         this.order = model.order;
         this.recoilSign = model.recoilSign;
         this.weights = model.weights;
@@ -62,7 +63,7 @@ public final class VisibilityAgainstPower {
         this.even = model.even;
         this.largestOdd = model.largestOdd;
         this.reflectionIsPerfect = model.reflectionIsPerfect;
-        this.table = Optional.of(table);
+        this.table = table;
     }
 
     /**
@@ -90,7 +91,7 @@ public final class VisibilityAgainstPower {
             return this;
         }
         return new VisibilityAgainstPower(
-                this, PiecewisePolynomial.of(x -> phaseOnly(x / largestOdd), 0.0, CELL, (int) cells));
+                this, new PolynomialOnDemand(x -> phaseOnly(x / largestOdd), 0.0, CELL, (int) cells));
     }
 
     /**
@@ -168,21 +169,73 @@ public final class VisibilityAgainstPower {
      * @return value and derivative; the derivative by the cross section is not computed and given as zero
      */
     public Point phaseOnlyPoint(double power, double polarizabilityVolume) {
+        double[] both = new double[2];
+        phaseOnly(power, polarizabilityVolume, both);
+        return new Point(both[0], both[1], 0.0);
+    }
+
+    /**
+     * The same for many powers into arrays, as a fit asks.
+     *
+     * @param powers               incident laser powers (W), &ge; 0
+     * @param polarizabilityVolume polarizability volume (m^3)
+     * @param signed               filled with the signed visibility at each power
+     * @param slopes               filled with its derivative by the polarizability volume (1/m^3)
+     */
+    public void phaseOnlyCurve(double[] powers, double polarizabilityVolume, double[] signed, double[] slopes) {
+        if (table == null || !(polarizabilityVolume > 0.0) || !arguments(powers, polarizabilityVolume, signed)) {
+            eachPhaseOnly(powers, polarizabilityVolume, signed, slopes);
+            return;
+        }
+        table.curve(signed, signed, slopes);
+        for (int k = 0; k < powers.length; k++) {
+            slopes[k] = powers[k] * (slopes[k] * largestOdd);
+        }
+    }
+
+    /** Places in the table; false if one lies outside. */
+    private boolean arguments(double[] powers, double polarizabilityVolume, double[] arguments) {
+        double end = table == null ? -1.0 : table.end();
+        boolean inside = true;
+        for (int k = 0; k < powers.length; k++) {
+            double argument = powers[k] * polarizabilityVolume * largestOdd;
+            arguments[k] = argument;
+            inside &= argument >= 0.0 && argument <= end;
+        }
+        return inside;
+    }
+
+    private void eachPhaseOnly(double[] powers, double polarizabilityVolume, double[] signed, double[] slopes) {
+        double[] both = new double[2];
+        for (int k = 0; k < powers.length; k++) {
+            phaseOnly(powers[k], polarizabilityVolume, both);
+            signed[k] = both[0];
+            slopes[k] = both[1];
+        }
+    }
+
+    private void phaseOnly(double power, double polarizabilityVolume, double[] both) {
         double product = requirePower(power) * polarizabilityVolume;
         double argument = Math.abs(product) * largestOdd;
-        if (table.isPresent() && argument <= table.get().end()) {
-            double[] both = new double[2];
-            table.get().valueAndDerivative(argument, both);
-            double parity = order % 2 != 0 && product < 0.0 ? -1.0 : 1.0;
-            double slope = both[1] * largestOdd * Math.signum(product == 0.0 ? 1.0 : product);
-            return new Point(parity * both[0], parity * power * slope, 0.0);
+        if (table == null || argument > table.end()) {
+            both[0] = phaseOnly(product);
+            both[1] = power * phaseOnlySlope(product);
+            return;
         }
+        table.valueAndDerivative(argument, both);
+        double parity = order % 2 != 0 && product < 0.0 ? -1.0 : 1.0;
+        double slope = both[1] * largestOdd * Math.signum(product == 0.0 ? 1.0 : product);
+        both[0] = parity * both[0];
+        both[1] = parity * power * slope;
+    }
+
+    private double phaseOnlySlope(double product) {
         double slope = 0.0;
         for (int q = 0; q < weights.length; q++) {
             double c = odd[q] * product;
             slope = Math.fma(weights[q] * odd[q], 0.5 * (Bessel.j(order - 1, c) - Bessel.j(order + 1, c)), slope);
         }
-        return new Point(phaseOnly(product), power * slope, 0.0);
+        return slope;
     }
 
     /**
@@ -241,19 +294,15 @@ public final class VisibilityAgainstPower {
 
     private double fastPhaseOnly(double product) {
         double argument = Math.abs(product) * largestOdd;
-        if (table.isEmpty() || argument > table.get().end()) {
+        if (table == null || argument > table.end()) {
             return phaseOnly(product);
         }
-        double value = table.get().value(argument);
+        double value = table.value(argument);
         return order % 2 != 0 && product < 0.0 ? -value : value;
     }
 
     private double phaseOnly(double product) {
-        double sum = 0.0;
-        for (int q = 0; q < weights.length; q++) {
-            sum = Math.fma(weights[q], Bessel.j(order, odd[q] * product), sum);
-        }
-        return sum;
+        return Bessel.weightedJ(order, weights, odd, product);
     }
 
     private double absorbed(double power, OpticalResponse response) {

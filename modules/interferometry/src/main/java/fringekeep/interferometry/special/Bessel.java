@@ -45,6 +45,50 @@ public final class Bessel {
     }
 
     /**
+     * A weighted sum of values at places in proportion, &Sigma; w_q J_n(f_q x), as averages over speeds need; the terms
+     * are added in their order by fused multiply-adds, with the bits of {@link #j}.
+     *
+     * @param order   whole order n, any sign
+     * @param weights w_q
+     * @param factors f_q, as many
+     * @param x       argument; f_q x finite
+     * @return the sum
+     * @throws IllegalArgumentException if an argument is not finite
+     */
+    public static double weightedJ(int order, double[] weights, double[] factors, double x) {
+        int n = Math.abs(order);
+        if (n > TABLE_ORDER) {
+            return slowWeightedJ(order, weights, factors, x);
+        }
+        PiecewisePolynomial reduced = Tables.REDUCED_J[n];
+        PiecewisePolynomial direct = Tables.DIRECT_J[n];
+        double sum = 0.0;
+        for (int q = 0; q < weights.length; q++) {
+            double argument = factors[q] * x;
+            double size = Math.abs(argument);
+            double value;
+            if (size >= REDUCED_BELOW && size < TABLE_END) {
+                value = direct.value(size);
+            } else if (size < REDUCED_BELOW) {
+                value = BesselSeries.prefactor(n, size) * reduced.value(size);
+            } else {
+                value = positiveJ(n, requireFinite(argument));
+            }
+            boolean negative = n % 2 == 1 && (order < 0) != (argument < 0.0);
+            sum = Math.fma(weights[q], negative ? -value : value, sum);
+        }
+        return sum;
+    }
+
+    private static double slowWeightedJ(int order, double[] weights, double[] factors, double x) {
+        double sum = 0.0;
+        for (int q = 0; q < weights.length; q++) {
+            sum = Math.fma(weights[q], j(order, factors[q] * x), sum);
+        }
+        return sum;
+    }
+
+    /**
      * Modified Bessel function of the first kind, scaled: e^-|x| I_n(x).
      *
      * @param order whole order n, any sign

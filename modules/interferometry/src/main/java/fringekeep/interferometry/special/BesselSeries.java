@@ -127,13 +127,18 @@ final class BesselSeries {
                 break;
             }
         }
-        return Math.sqrt(2.0 / (Math.PI * x)) * (even * phaseCosine(n, x) - odd * phaseSine(n, x));
-    }
-
-    /** cos(x - n&pi;/2 - &pi;/4) from sin x and cos x, so that a large x loses no digits in the difference. */
-    private static double phaseCosine(int n, double x) {
         double cosine = StrictMath.cos(x);
         double sine = StrictMath.sin(x);
+        double first = even * phaseCosine(n, cosine, sine);
+        double second = odd * phaseCosine((n + 1) % 4, cosine, sine);
+        return Math.sqrt(2.0 / (Math.PI * x)) * (first - second);
+    }
+
+    /**
+     * cos(x - n&pi;/2 - &pi;/4) from sin x and cos x, so that a large x loses no digits in the difference; its sine is that
+     * of the next order.
+     */
+    private static double phaseCosine(int n, double cosine, double sine) {
         double value =
                 switch (n % 4) {
                     case 0 -> cosine + sine;
@@ -142,10 +147,6 @@ final class BesselSeries {
                     default -> cosine - sine;
                 };
         return value * Math.sqrt(0.5);
-    }
-
-    private static double phaseSine(int n, double x) {
-        return phaseCosine((n + 1) % 4, x);
     }
 
     private static double largeArgumentI(int n, double x) {

@@ -42,15 +42,26 @@ public final class PiecewisePolynomial {
      * @throws IllegalArgumentException if the width is not positive or there is no cell
      */
     public static PiecewisePolynomial of(DoubleUnaryOperator function, double start, double width, int cells) {
-        if (!(width > 0.0) || cells < 1) {
-            throw new IllegalArgumentException(
-                    "a table needs cells of positive width: " + cells + " cells of " + width);
-        }
+        requireCells(width, cells);
         double[] coefficients = new double[cells * POINTS];
         for (int cell = 0; cell < cells; cell++) {
             interpolate(function, start + cell * width, width, coefficients, cell * POINTS);
         }
         return new PiecewisePolynomial(start, width, cells, coefficients);
+    }
+
+    static void requireCells(double width, int cells) {
+        if (!(width > 0.0) || cells < 1) {
+            throw new IllegalArgumentException(
+                    "a table needs cells of positive width: " + cells + " cells of " + width);
+        }
+    }
+
+    /** The coefficients of one cell. */
+    static double[] cell(DoubleUnaryOperator function, double low, double width) {
+        double[] coefficients = new double[POINTS];
+        interpolate(function, low, width, coefficients, 0);
+        return coefficients;
     }
 
     private static void interpolate(DoubleUnaryOperator function, double low, double width, double[] target, int at) {
@@ -95,12 +106,42 @@ public final class PiecewisePolynomial {
         double position = (x - start) * inverseWidth;
         int cell = cellOf(position, x);
         double t = 2.0 * (position - cell) - 1.0;
-        int at = cell * POINTS;
-        double[] c = coefficients;
+        return value(coefficients, cell * POINTS, t);
+    }
+
+    /** The polynomial with coefficients from c[at] on. */
+    static double value(double[] c, int at, double t) {
         double upper = Math.fma(Math.fma(Math.fma(c[at + 10], t, c[at + 9]), t, c[at + 8]), t, c[at + 7]);
         double middle =
                 Math.fma(Math.fma(Math.fma(Math.fma(upper, t, c[at + 6]), t, c[at + 5]), t, c[at + 4]), t, c[at + 3]);
         return Math.fma(Math.fma(Math.fma(middle, t, c[at + 2]), t, c[at + 1]), t, c[at]);
+    }
+
+    /** Value and derivative by t of that polynomial, the latter times a scale. */
+    static void both(double[] c, int at, double t, double scale, double[] target) {
+        double value = c[at + 10];
+        double slope = value;
+        value = Math.fma(value, t, c[at + 9]);
+        slope = Math.fma(slope, t, value);
+        value = Math.fma(value, t, c[at + 8]);
+        slope = Math.fma(slope, t, value);
+        value = Math.fma(value, t, c[at + 7]);
+        slope = Math.fma(slope, t, value);
+        value = Math.fma(value, t, c[at + 6]);
+        slope = Math.fma(slope, t, value);
+        value = Math.fma(value, t, c[at + 5]);
+        slope = Math.fma(slope, t, value);
+        value = Math.fma(value, t, c[at + 4]);
+        slope = Math.fma(slope, t, value);
+        value = Math.fma(value, t, c[at + 3]);
+        slope = Math.fma(slope, t, value);
+        value = Math.fma(value, t, c[at + 2]);
+        slope = Math.fma(slope, t, value);
+        value = Math.fma(value, t, c[at + 1]);
+        slope = Math.fma(slope, t, value);
+        value = Math.fma(value, t, c[at]);
+        target[0] = value;
+        target[1] = scale * slope;
     }
 
     /**
@@ -133,15 +174,7 @@ public final class PiecewisePolynomial {
         double position = (x - start) * inverseWidth;
         int cell = cellOf(position, x);
         double t = 2.0 * (position - cell) - 1.0;
-        int at = cell * POINTS;
-        double value = coefficients[at + DEGREE];
-        double slope = 0.0;
-        for (int power = DEGREE - 1; power >= 0; power--) {
-            slope = Math.fma(slope, t, value);
-            value = Math.fma(value, t, coefficients[at + power]);
-        }
-        target[0] = value;
-        target[1] = 2.0 * inverseWidth * slope;
+        both(coefficients, cell * POINTS, t, 2.0 * inverseWidth, target);
     }
 
     private int cellOf(double position, double x) {
