@@ -37,12 +37,17 @@ final class ArchiveCommands {
 
     @Command(name = "found", description = "Founds a new archive in an empty folder.", mixinStandardHelpOptions = true)
     int found(
-            @Option(names = "--title", required = true, description = "The laboratory's name for it.") String title,
+            @Option(
+                            names = "--title",
+                            required = true,
+                            paramLabel = "TEXT",
+                            description = "The laboratory's name for it.")
+                    String title,
             @Option(
                             names = "--day-boundary",
                             defaultValue = "06:00",
                             paramLabel = "HH:MM",
-                            description = "When a measurement day begins.")
+                            description = "When a measurement day begins (${DEFAULT-VALUE} when not given).")
                     String dayBoundary,
             @Option(
                             names = "--zone",
@@ -206,12 +211,18 @@ final class ArchiveCommands {
             mixinStandardHelpOptions = true)
     int copy(
             @Option(names = "--archive", paramLabel = "FOLDER", description = "The archive.") @Nullable Path folder,
+            @Option(names = "--json", description = "Write JSON.") boolean json,
             @Parameters(paramLabel = "COPY", description = "Folder of the copy.") Path copy)
             throws ProblemException, StoppedException {
         try (Session session = Session.open(folder);
-                StoppableWork work = new StoppableWork(console, true)) {
+                StoppableWork work = new StoppableWork(console, !json)) {
             session.archive().copyTo(copy, work);
-            console.line(copy + ": " + session.archive().facts().watermark() + " entries");
+            long entries = session.archive().facts().watermark();
+            if (json) {
+                console.json(JsonObject.EMPTY.with("copy", copy.toString()).with("entries", entries));
+            } else {
+                console.line(copy + ": " + entries + " entries");
+            }
         }
         return Exit.DONE;
     }
@@ -237,12 +248,20 @@ final class ArchiveCommands {
             mixinStandardHelpOptions = true)
     int receive(
             @Option(names = "--archive", paramLabel = "FOLDER", description = "The archive.") @Nullable Path folder,
+            @Option(names = "--json", description = "Write JSON.") boolean json,
             @Option(names = "--persons", description = "Also names of persons.") boolean persons,
             @Parameters(paramLabel = "SOURCE", description = "Folder of the copy or bundle.") Path source)
             throws ProblemException, StoppedException {
         try (Session session = Session.open(folder);
-                StoppableWork work = new StoppableWork(console, true)) {
+                StoppableWork work = new StoppableWork(console, !json)) {
             Archive.Received received = session.archive().receive(source, persons, work);
+            if (json) {
+                console.json(JsonObject.EMPTY
+                        .with("received", received.records())
+                        .with("known", received.known())
+                        .with("supplied", received.parts()));
+                return Exit.DONE;
+            }
             console.line(received.records() + " records received, " + received.known() + " known already, "
                     + received.parts() + " parts supplied");
         }
@@ -266,9 +285,11 @@ final class ArchiveCommands {
             mixinStandardHelpOptions = true)
     int purge(
             @Option(names = "--archive", paramLabel = "FOLDER", description = "The archive.") @Nullable Path folder,
-            @Option(names = "--what", required = true, description = "raw, payload or part.") Archive.PurgeTarget what,
-            @Option(names = "--reason", required = true, description = "Reason, a few words.") String reason,
-            @Option(names = "--text", required = true, description = "Why, in full.") String text,
+            @Option(names = "--what", required = true, paramLabel = "SORT", description = "raw, payload or part.")
+                    Archive.PurgeTarget what,
+            @Option(names = "--reason", required = true, paramLabel = "TEXT", description = "Reason, a few words.")
+                    String reason,
+            @Option(names = "--text", required = true, paramLabel = "TEXT", description = "Why, in full.") String text,
             @Parameters(paramLabel = "SHA-256", description = "Hash of the bytes.") String hash)
             throws ProblemException {
         try (Session session = Session.open(folder)) {

@@ -20,10 +20,13 @@ final class Commands {
                 new StageCommands(console),
                 new LineageCommands(console),
                 new RecomputeCommands(console),
+                new ReselectCommand(console),
                 new BundleCommands(console),
                 new ComputeCommand(console),
                 new DemoCommand(console))) {
-            groups.add(new CommandLine(group));
+            CommandLine line = new CommandLine(group);
+            line.getSubcommands().values().forEach(command -> HelpTexts.complete(command.getCommandSpec()));
+            groups.add(line);
         }
     }
 
@@ -46,6 +49,7 @@ final class Commands {
             for (CommandLine command : new CommandLine(line.getCommandSpec().userObject())
                     .getSubcommands()
                     .values()) {
+                HelpTexts.complete(command.getCommandSpec());
                 top.addSubcommand(command.getCommandName(), command);
             }
         }

@@ -6,10 +6,12 @@ import fringekeep.archive.json.JsonArray;
 import fringekeep.archive.json.JsonObject;
 import fringekeep.archive.kind.ValueComparison;
 import fringekeep.archive.lineage.Recomputed;
+import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
 import fringekeep.archive.problem.StoppedException;
 import fringekeep.archive.record.Hash;
 import fringekeep.audit.Recompute;
+import fringekeep.audit.Through;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Locale;
@@ -29,29 +31,63 @@ final class RecomputeCommands {
 
     @Command(
             name = "recompute",
-            description = "Computes records and everything upstream again and compares value by value.",
+            description = {
+                "Computes records and everything upstream again and compares value by value.",
+                "By default each link by itself, from its recorded inputs. With --through what comes out of a link is fed"
+                        + " into the next, which answers whether a record follows from raw files and entered facts alone."
+            },
+            footer = {
+                "",
+                "Verdicts: same bits; same within rounding (at most 1,024 units in the last place); different; not"
+                        + " computable. Nothing is recorded.",
+                "Exit code 1 also where something differs or cannot be computed."
+            },
             mixinStandardHelpOptions = true)
     int recompute(
             @Option(names = "--archive", paramLabel = "FOLDER", description = "The archive.") @Nullable Path folder,
             @Option(names = "--json", description = "Write JSON.") boolean json,
             @Option(names = "--all", description = "Also name the records that come out the same.") boolean all,
+            @Option(names = "--through", description = "Feed recomputed results downstream.") boolean through,
+            @Option(
+                            names = "--values",
+                            description = "With --through: write every value of the named records with its verdict.")
+                    boolean values,
             @Parameters(arity = "1..*", paramLabel = "RECORD", description = "Records to recompute.")
                     List<String> references)
             throws ProblemException, StoppedException {
+        if (values && !through) {
+            throw new ProblemException(new Problem(
+                    "recompute.values",
+                    "--values is asked for without --through.",
+                    "--values",
+                    "Add --through: the values of a record are listed with what follows from raw files."));
+        }
         try (Session session = Session.open(folder);
                 StoppableWork work = new StoppableWork(console, !json)) {
             List<Hash> targets = session.find(references);
-            Recompute.Verdicts verdicts = Recompute.upstreamOf(session.archive(), targets, work);
-            if (json) {
-                console.json(json(session.archive(), verdicts));
-            } else {
-                text(session.archive(), verdicts, all);
-            }
-            return verdicts.worst() == Recomputed.Verdict.DIFFERS ? Exit.COULD_NOT : Exit.DONE;
+            return through
+                    ? new ThroughReport(console, session.archive(), values, all)
+                            .write(Through.upstreamOf(session.archive(), targets, work), json)
+                    : each(session.archive(), Recompute.upstreamOf(session.archive(), targets, work), json, all);
         }
     }
 
+    private int each(Archive archive, Recompute.Verdicts verdicts, boolean json, boolean all) {
+        if (json) {
+            console.json(json(archive, verdicts));
+        } else {
+            text(archive, verdicts, all);
+        }
+        return verdicts.worst().compareTo(Recomputed.Verdict.NOT_COMPUTABLE) >= 0 ? Exit.COULD_NOT : Exit.DONE;
+    }
+
     private void text(Archive archive, Recompute.Verdicts verdicts, boolean all) {
+        records(console, archive, verdicts, all);
+        console.line("worst: " + verdicts.worst().words());
+    }
+
+    /** The records that did not come out the same, or all, and how many have each verdict. */
+    static void records(Console console, Archive archive, Recompute.Verdicts verdicts, boolean all) {
         for (Recomputed each : verdicts.records()) {
             boolean shown = all
                     || each.verdict() == Recomputed.Verdict.DIFFERS
@@ -61,15 +97,14 @@ final class RecomputeCommands {
             if (shown) {
                 console.line(archive.label(each.record()) + "  "
                         + each.verdict().words() + (each.reason().isEmpty() ? "" : " (" + each.reason() + ")"));
-                each.differences().forEach(this::difference);
+                each.differences().forEach(difference -> difference(console, difference));
             }
         }
         verdicts.counts()
                 .forEach((verdict, count) -> console.line(String.format(Locale.ROOT, "%6d  %s", count, verdict)));
-        console.line("worst: " + verdicts.worst().words());
     }
 
-    private void difference(ValueComparison.Difference difference) {
+    private static void difference(Console console, ValueComparison.Difference difference) {
         String units = difference.units() >= 0 ? "  " + difference.units() + " units in the last place" : "";
         String sigmas = difference.inDeviations().isPresent()
                 ? String.format(
@@ -79,7 +114,8 @@ final class RecomputeCommands {
                 + sigmas);
     }
 
-    private static JsonObject json(Archive archive, Recompute.Verdicts verdicts) {
+    /** The verdicts as JSON. */
+    static JsonObject json(Archive archive, Recompute.Verdicts verdicts) {
         List<Json> records = verdicts.records().stream()
                 .<Json>map(each -> JsonObject.EMPTY
                         .with("record", each.record().hex())

@@ -195,7 +195,12 @@ final class RecordCommands {
     int list(
             @Option(names = "--archive", paramLabel = "FOLDER", description = "The archive.") @Nullable Path folder,
             @Option(names = "--json", description = "Write JSON with SI values.") boolean json,
-            @Option(names = "--limit", defaultValue = "100", description = "Rows at most.") int limit,
+            @Option(
+                            names = "--limit",
+                            defaultValue = "100",
+                            paramLabel = "ROWS",
+                            description = "Rows at most (${DEFAULT-VALUE} when not given).")
+                    int limit,
             @Option(names = "--all", description = "Also records that were corrected.") boolean all,
             @Option(names = "--word", paramLabel = "WORD", description = "Found by this word; may be repeated.")
                     @Nullable
@@ -341,21 +346,25 @@ final class RecordCommands {
             mixinStandardHelpOptions = true)
     int judge(
             @Option(names = "--archive", paramLabel = "FOLDER", description = "The archive.") @Nullable Path folder,
+            @Option(names = "--json", description = "Write JSON.") boolean json,
             @Option(names = "--person", required = true, paramLabel = "NAME", description = "Who judges.")
                     String person,
             @Option(
                             names = "--verdict",
                             required = true,
+                            paramLabel = "VERDICT",
                             description = "withdrawn, masked, doubted, restored or preferred.")
                     String verdict,
             @Option(
                             names = "--reason",
                             required = true,
+                            paramLabel = "CODE",
                             description = "Code of the reason, such as mode-hop; see schema judgement.")
                     String reason,
             @Option(names = "--words", paramLabel = "TEXT", description = "The reason in words.") @Nullable
                     String words,
-            @Option(names = "--channel", description = "With masked: which channel.") @Nullable String channel,
+            @Option(names = "--channel", paramLabel = "NAME", description = "With masked: which channel.") @Nullable
+                    String channel,
             @Option(
                             names = "--points",
                             paramLabel = "FIRST-LAST",
@@ -406,7 +415,7 @@ final class RecordCommands {
                             Optional.empty(),
                             Optional.empty(),
                             session.person(person)));
-            console.line(recorded.label() + "  " + recorded.fingerprint());
+            RecordedText.write(console, session.archive(), List.of(recorded.fingerprint()), json);
             return Exit.DONE;
         }
     }

@@ -124,6 +124,7 @@ final class StageCommands {
             mixinStandardHelpOptions = true)
     int place(
             @Option(names = "--archive", paramLabel = "FOLDER", description = "The archive.") @Nullable Path folder,
+            @Option(names = "--json", description = "Write JSON.") boolean json,
             @Option(names = "--person", required = true, paramLabel = "NAME", description = "Who places.")
                     String person,
             @Option(names = "--setup", required = true, paramLabel = "RECORD", description = "The setup.") String setup,
@@ -133,6 +134,7 @@ final class StageCommands {
             @Option(names = "--series", paramLabel = "RECORD", description = "The series.") @Nullable String series,
             @Option(
                             names = "--step",
+                            paramLabel = "STEP",
                             description = "Its step, from 0, of the first scan; the next have the next steps.")
                     @Nullable
                     Integer step,
@@ -145,6 +147,7 @@ final class StageCommands {
             @Option(
                             names = "--purpose",
                             required = true,
+                            paramLabel = "PURPOSE",
                             description = "signal, reference, background, laser-off, empty-beam, test.")
                     String purpose,
             @Parameters(arity = "1..*", paramLabel = "SCAN", description = "Scans in order.") List<String> scans)
@@ -167,7 +170,7 @@ final class StageCommands {
             }
             List<Hash> placed =
                     new PlaceScans(archive).place(places, session.person(person).orElseThrow());
-            placed.forEach(placement -> console.line(archive.label(placement) + "  " + placement));
+            RecordedText.write(console, archive, placed, json);
             return Exit.DONE;
         }
     }
@@ -198,7 +201,11 @@ final class StageCommands {
     int fit(
             @Option(names = "--archive", paramLabel = "FOLDER", description = "The archive.") @Nullable Path folder,
             @Option(names = "--json", description = "Write JSON.") boolean json,
-            @Option(names = "--channel", defaultValue = "counts", description = "Channel that is fitted.")
+            @Option(
+                            names = "--channel",
+                            defaultValue = "counts",
+                            paramLabel = "NAME",
+                            description = "Channel that is fitted (${DEFAULT-VALUE} when not given).")
                     String channel,
             @Option(
                             names = "--choices",
@@ -301,10 +308,13 @@ final class StageCommands {
             mixinStandardHelpOptions = true)
     int select(
             @Option(names = "--archive", paramLabel = "FOLDER", description = "The archive.") @Nullable Path folder,
+            @Option(names = "--json", description = "Write JSON.") boolean json,
             @Option(names = "--person", required = true, paramLabel = "NAME", description = "Who selects.")
                     String person,
-            @Option(names = "--label", defaultValue = "", description = "A short name.") String label,
-            @Option(names = "--rule", required = true, description = "The rule in words.") String rule,
+            @Option(names = "--label", defaultValue = "", paramLabel = "TEXT", description = "A short name.")
+                    String label,
+            @Option(names = "--rule", required = true, paramLabel = "TEXT", description = "The rule in words.")
+                    String rule,
             @Option(names = "--is", paramLabel = "COLUMN=TEXT", description = "A column's text; may be repeated.")
                     @Nullable
                     Map<String, String> is,
@@ -337,8 +347,7 @@ final class StageCommands {
             NewRecord selection = new SelectFits(session.archive())
                     .select(label, rule, conditions, session.person(person).orElseThrow());
             Archive.Recorded recorded = session.archive().record(selection);
-            console.line(recorded.label() + "  " + title(session.archive(), recorded.fingerprint()) + "  "
-                    + recorded.fingerprint());
+            RecordedText.write(console, session.archive(), List.of(recorded.fingerprint()), json);
             return Exit.DONE;
         }
     }
@@ -354,6 +363,7 @@ final class StageCommands {
             mixinStandardHelpOptions = true)
     int property(
             @Option(names = "--archive", paramLabel = "FOLDER", description = "The archive.") @Nullable Path folder,
+            @Option(names = "--json", description = "Write JSON.") boolean json,
             @Option(
                             names = "--choices",
                             paramLabel = "FILE",
@@ -371,7 +381,7 @@ final class StageCommands {
             throws ProblemException, StoppedException {
         JsonObject chosen = choices == null ? JsonObject.EMPTY : object(choices);
         try (Session session = Session.open(folder);
-                StoppableWork work = new StoppableWork(console, true)) {
+                StoppableWork work = new StoppableWork(console, !json)) {
             Archive archive = session.archive();
             NewRecord request = new GatherProperty(archive)
                     .request(
@@ -389,8 +399,7 @@ final class StageCommands {
                 return Exit.DONE;
             }
             Archive.Recorded recorded = archive.record(computed);
-            console.line(
-                    recorded.label() + "  " + title(archive, recorded.fingerprint()) + "  " + recorded.fingerprint());
+            RecordedText.write(console, archive, List.of(recorded.fingerprint()), json);
             return Exit.DONE;
         }
     }
@@ -401,20 +410,33 @@ final class StageCommands {
             mixinStandardHelpOptions = true)
     int draw(
             @Option(names = "--archive", paramLabel = "FOLDER", description = "The archive.") @Nullable Path folder,
+            @Option(names = "--json", description = "Write JSON.") boolean json,
             @Option(names = "--into", required = true, paramLabel = "FOLDER", description = "Where they go.") Path into,
-            @Option(names = "--form", split = ",", description = "svg, pdf, png, csv; all when not given.")
+            @Option(
+                            names = "--form",
+                            split = ",",
+                            paramLabel = "FORM",
+                            description = "svg, pdf, png, csv; all when not given.")
                     PictureFiles.Form @Nullable [] forms,
             @Parameters(arity = "1..*", paramLabel = "RECORD", description = "What is drawn.") List<String> references)
             throws ProblemException {
         try (Session session = Session.open(folder)) {
+            List<String> written = new ArrayList<>();
             for (Hash record : session.find(references)) {
-                draw(session.archive(), record, into, forms == null ? PictureFiles.Form.values() : forms);
+                written.addAll(
+                        draw(session.archive(), record, into, forms == null ? PictureFiles.Form.values() : forms));
+            }
+            if (json) {
+                console.json(JsonArray.ofTexts(written));
+            } else {
+                written.forEach(console::line);
             }
             return Exit.DONE;
         }
     }
 
-    private void draw(Archive archive, Hash record, Path into, PictureFiles.Form[] forms) throws ProblemException {
+    private static List<String> draw(Archive archive, Hash record, Path into, PictureFiles.Form[] forms)
+            throws ProblemException {
         RecordView view = archive.record(record).orElseThrow();
         List<Picture> pictures = archive.kinds()
                 .get(view.head().kind())
@@ -428,15 +450,17 @@ final class StageCommands {
                     "Draw a scan, a fit, a velocity, a property or a figure."));
         }
         String name = archive.label(record).replaceAll("[^A-Za-z0-9]+", "-");
+        List<String> written = new ArrayList<>();
         try {
             Files.createDirectories(into);
             for (int i = 0; i < pictures.size(); i++) {
                 for (PictureFiles.Form form : forms) {
                     Path file = into.resolve(name + (pictures.size() == 1 ? "" : "-" + (i + 1)) + "." + form.ending());
                     Files.write(file, PictureFiles.write(pictures.get(i), form));
-                    console.line(file.toString());
+                    written.add(file.toString());
                 }
             }
+            return written;
         } catch (IOException e) {
             throw new ProblemException(new Problem(
                     "command.not-written",
