@@ -3,8 +3,11 @@ package fringekeep.benchmarks;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import fringekeep.interferometry.fringe.FringeFitter;
+import java.io.File;
 import java.io.IOException;
 import java.io.UncheckedIOException;
+import java.net.URISyntaxException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import org.junit.jupiter.api.Test;
@@ -40,10 +43,20 @@ class FirstFitBenchmarkTest {
         }
     }
 
+    /** The folder or jar of a class: a program that fits needs the library and nothing else. */
+    private static Path place(Class<?> type) {
+        try {
+            return Path.of(
+                    type.getProtectionDomain().getCodeSource().getLocation().toURI());
+        } catch (URISyntaxException e) {
+            throw new IllegalStateException(e);
+        }
+    }
+
     @Test
     void firstFitInAColdProcess() {
         String java = Path.of(System.getProperty("java.home"), "bin", "java").toString();
-        String path = System.getProperty("surefire.test.class.path", System.getProperty("java.class.path"));
+        String path = place(FirstFit.class) + File.pathSeparator + place(FringeFitter.class);
         double[] inside = new double[PROCESSES];
         double[] whole = new double[PROCESSES];
         double[] script = new double[PROCESSES];

@@ -59,6 +59,8 @@ class NumericsBenchmarkTest {
     private static Path scans = Path.of("");
     private static final double[] PLACES = new double[POINTS];
     private static final List<FringeData> DATA = new ArrayList<>();
+    /** The same counts, every scan over a grid of its own: moved by whole picometres. */
+    private static final List<FringeData> MOVED = new ArrayList<>();
 
     @BeforeAll
     static void prepare() throws IOException {
@@ -82,7 +84,10 @@ class NumericsBenchmarkTest {
                 counts[k] = Math.max(0, Math.rint(mean + Math.sqrt(mean) * random.nextGaussian()));
             }
             rows.add(counts);
+            double move = 1e-12 * scan;
             DATA.add(FringeData.of(Arrays.stream(PLACES).map(x -> x * 1e-9).toArray(), counts));
+            MOVED.add(FringeData.of(
+                    Arrays.stream(PLACES).map(x -> x * 1e-9 + move).toArray(), counts));
         }
         scans = table("scans.csv", rows);
     }
@@ -99,10 +104,10 @@ class NumericsBenchmarkTest {
         return Files.writeString(folder.resolve(name), text, StandardCharsets.UTF_8);
     }
 
-    private static double fits(FringeOptions options) {
+    private static double fits(List<FringeData> scans, FringeOptions options) {
         return Bench.cpu(() -> {
                     double sum = 0;
-                    for (FringeData data : DATA) {
+                    for (FringeData data : scans) {
                         sum += FringeFitter.fit(data, options).orThrow().mean().value();
                     }
                     assertThat(sum).isPositive();
@@ -111,19 +116,24 @@ class NumericsBenchmarkTest {
     }
 
     private static void againstScipy(
-            String row, String what, FringeOptions options, ToDoubleFunction<FringeFit> result, double tolerance) {
+            String row,
+            String what,
+            List<FringeData> data,
+            FringeOptions options,
+            ToDoubleFunction<FringeFit> result,
+            double tolerance) {
         if (scipy.isEmpty()) {
             return;
         }
         OtherSide other = scipy.orElseThrow();
         double[] theirs = other.ask(what, scans, 50).results();
         for (int k = 0; k < theirs.length; k++) {
-            FringeFit fit = FringeFitter.fit(DATA.get(k), options).orThrow();
+            FringeFit fit = FringeFitter.fit(data.get(k), options).orThrow();
             assertThat(result.applyAsDouble(fit)).isCloseTo(theirs[k], within(tolerance));
         }
         Bench.compare(
                 row,
-                () -> fits(options),
+                () -> fits(data, options),
                 "SciPy",
                 () -> other.ask(what, scans, 50).seconds() / 50);
     }
@@ -134,7 +144,24 @@ class NumericsBenchmarkTest {
 
     @Test
     void fringeFitAtFixedPeriodAgainstCurveFit() {
-        againstScipy("fringe fit, period fixed", "fixed", SQUARES, NumericsBenchmarkTest::visibility, 1e-6);
+        againstScipy("fringe fit, period fixed", "fixed", DATA, SQUARES, NumericsBenchmarkTest::visibility, 1e-6);
+    }
+
+    @Test
+    void fringeFitOverANewGridEachTimeAgainstCurveFit() {
+        againstScipy(
+                "the same, a new grid each time", "fixed", MOVED, SQUARES, NumericsBenchmarkTest::visibility, 1e-6);
+    }
+
+    @Test
+    void freePeriodOverANewGridEachTimeAgainstCurveFit() {
+        againstScipy(
+                "period free, a new grid each time",
+                "free",
+                MOVED,
+                SQUARES.periodFree(true),
+                fit -> 1e9 * fit.estimate("period").orElseThrow().value(),
+                1e-4);
     }
 
     @Test
@@ -142,6 +169,7 @@ class NumericsBenchmarkTest {
         againstScipy(
                 "Poisson likelihood, period fixed",
                 "poisson",
+                DATA,
                 FringeOptions.atPeriod(PERIOD),
                 NumericsBenchmarkTest::visibility,
                 1e-4);
@@ -152,6 +180,7 @@ class NumericsBenchmarkTest {
         againstScipy(
                 "fringe fit, period free",
                 "free",
+                DATA,
                 SQUARES.periodFree(true),
                 fit -> 1e9 * fit.estimate("period").orElseThrow().value(),
                 1e-4);
@@ -166,7 +195,7 @@ class NumericsBenchmarkTest {
         }
         Bench.compare(
                 "fringe fit, period fixed",
-                () -> fits(SQUARES),
+                () -> fits(DATA, SQUARES),
                 "Commons Math LM",
                 () -> Bench.cpu(() -> {
                             for (FringeData data : DATA) {
