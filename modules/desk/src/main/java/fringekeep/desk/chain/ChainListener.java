@@ -13,6 +13,9 @@ public interface ChainListener {
     /** Opens a stop with those linked with the selection only. */
     void linked(int stop);
 
+    /** Opens the choice of what is in view. */
+    void chooseView();
+
     /** Looks for words. */
     void find(String words);
 }

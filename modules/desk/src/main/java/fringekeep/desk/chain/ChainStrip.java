@@ -1,5 +1,6 @@
 package fringekeep.desk.chain;
 
+import fringekeep.archive.graph.StateName;
 import fringekeep.desk.look.Ink;
 import fringekeep.desk.look.Mark;
 import fringekeep.desk.look.Painted;
@@ -25,13 +26,14 @@ public final class ChainStrip extends Painted {
     public static final int LEFT = 152;
 
     private static final int HEIGHT = 88;
+    private static final int TALL = 104;
+    private static final int TICKS_FROM = 1600;
     private static final Texts TEXTS = new Texts("fringekeep.desk.chain.Texts", ChainStrip.class);
 
     private final List<StopCell> cells = new ArrayList<>();
     private final JTextField find = new JTextField();
+    private final ViewCell viewCell;
     private transient ChainState state;
-    private String view = "";
-    private String detail = "";
     private transient List<Going> going = List.of();
     private int open;
 
@@ -41,7 +43,14 @@ public final class ChainStrip extends Painted {
     /** A strip that tells a listener what a person does. */
     public ChainStrip(ChainState first, ChainListener listener) {
         this.state = first;
+        this.viewCell = new ViewCell(listener);
         setOpaque(true);
+        setName("strip");
+        add(viewCell);
+        key(viewCell, "RIGHT", () -> cells.get(0).requestFocusInWindow());
+        key(viewCell, "ENTER", listener::chooseView);
+        key(viewCell, "SPACE", listener::chooseView);
+        key(viewCell, "DOWN", listener::chooseView);
         for (int i = 0; i < first.stops().size(); i++) {
             StopCell cell = new StopCell(i, first.stops().get(i), listener);
             cells.add(cell);
@@ -69,14 +78,42 @@ public final class ChainStrip extends Painted {
         for (int i = 0; i < cells.size(); i++) {
             cells.get(i).show(next.stops().get(i), i == openStop, i == 0);
         }
+        viewCell.linked(next.selection());
         repaint();
     }
 
     /** Says what is in view: name and a line below. */
     public void inView(String name, String more) {
-        view = name;
-        detail = more;
-        repaint();
+        viewCell.inView(name, more);
+    }
+
+    /** When records of each stop were made over the view's time, from 0 to 1; painted on wide windows only. */
+    public void ticks(List<double[]> ticks) {
+        for (int i = 0; i < cells.size() && i < ticks.size(); i++) {
+            cells.get(i).ticks(ticks.get(i));
+        }
+    }
+
+    /** Whether there is room for the row of ticks. */
+    public boolean wide() {
+        return getWidth() >= TICKS_FROM;
+    }
+
+    /** Puts the bar under the left cell: a sheet about what is in view stands below. */
+    public void viewOpen(boolean opened) {
+        viewCell.open(opened);
+        if (opened) {
+            for (int i = 0; i < cells.size(); i++) {
+                cells.get(i).show(state.stops().get(i), false, i == 0);
+            }
+        } else {
+            show(state, open);
+        }
+    }
+
+    /** Gives the focus to what is in view. */
+    public void focusView() {
+        viewCell.requestFocusInWindow();
     }
 
     /** Says what is going on, at most two lines. */
@@ -97,24 +134,35 @@ public final class ChainStrip extends Painted {
 
     /** Where the columns of the stops begin, and where the last ends; sheets align with them. */
     public int[] columns() {
-        int[] edges = new int[cells.size() + 1];
-        int width = getWidth() - LEFT - right();
-        for (int i = 0; i <= cells.size(); i++) {
-            edges[i] = LEFT + width * i / cells.size();
+        return columns(getWidth(), cells.size());
+    }
+
+    /** The same for a strip of a width: stages' sheets are as wide as the strip above them. */
+    public static int[] columns(int width, int stops) {
+        int[] edges = new int[stops + 1];
+        int middle = width - left(width) - right(width);
+        for (int i = 0; i <= stops; i++) {
+            edges[i] = left(width) + middle * i / stops;
         }
         return edges;
     }
 
-    private int right() {
-        return getWidth() >= 1900 ? 420 : 232;
+    private static int left(int width) {
+        return width >= 1900 ? 232 : LEFT;
+    }
+
+    private static int right(int width) {
+        return width >= 1900 ? 420 : 232;
     }
 
     private void keys(StopCell cell, int i, ChainListener listener) {
-        key(cell, "LEFT", () -> cells.get(Math.max(0, i - 1)).requestFocusInWindow());
+        key(cell, "LEFT", () -> (i == 0 ? viewCell : cells.get(i - 1)).requestFocusInWindow());
         key(cell, "RIGHT", () -> cells.get(Math.min(cells.size() - 1, i + 1)).requestFocusInWindow());
         key(cell, "ENTER", () -> listener.open(i));
         key(cell, "SPACE", () -> listener.open(i));
         key(cell, "DOWN", () -> listener.linked(i));
+        key(cell, "O", () -> listener.filter(i, StateName.OUTDATED));
+        key(cell, "W", () -> listener.filter(i, StateName.WITHDRAWN));
     }
 
     private static void key(JComponent component, String stroke, Runnable work) {
@@ -129,12 +177,13 @@ public final class ChainStrip extends Painted {
 
     @Override
     public Dimension getPreferredSize() {
-        return new Dimension(1280, HEIGHT);
+        return new Dimension(1280, wide() ? TALL : HEIGHT);
     }
 
     @Override
     public void doLayout() {
         int[] edges = columns();
+        viewCell.setBounds(0, 0, edges[0], getHeight());
         for (int i = 0; i < cells.size(); i++) {
             cells.get(i).setBounds(edges[i], 0, edges[i + 1] - edges[i], getHeight());
         }
@@ -147,12 +196,6 @@ public final class ChainStrip extends Painted {
         int[] edges = columns();
         try (Pen pen = new Pen(graphics)) {
             pen.fill(Ink.GROUND.color(), 0, 0, getWidth(), getHeight());
-            pen.text(TEXTS.of("view"), Type.SMALL, Ink.INK2, 16, 22);
-            pen.fitted(view, Type.VIEW, Ink.INK, 16, 41, LEFT - 20.0);
-            pen.fitted(detail, Type.SMALL, Ink.INK2, 16, 56, LEFT - 20.0);
-            String linked =
-                    state.selection().isEmpty() ? TEXTS.of("linked.none") : TEXTS.of("linked", state.selection());
-            pen.fitted(linked, Type.SMALL, Ink.INK2, 16, 75, LEFT - 20.0);
             double x = edges[cells.size()];
             pen.upright(Ink.RULE, x, 10, getHeight() - 1.0);
             double y = 52;

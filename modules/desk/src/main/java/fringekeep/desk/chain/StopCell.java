@@ -20,12 +20,12 @@ import javax.accessibility.AccessibleRole;
 final class StopCell extends Painted {
     private static final Texts TEXTS = new Texts("fringekeep.desk.chain.Texts", StopCell.class);
     private static final int INSET = 10;
-    private static final int THREAD = 71;
 
     private final int position;
     private transient StopState state;
     private boolean open;
     private boolean threadStarts;
+    private transient double[] ticks = new double[0];
     private transient double ringFrom = -1;
     private transient double slashFrom = -1;
 
@@ -50,6 +50,16 @@ final class StopCell extends Painted {
         repaint();
     }
 
+    void ticks(double[] next) {
+        ticks = next.clone();
+        repaint();
+    }
+
+    /** Height of the thread, a fixed room above the foot. */
+    private int thread() {
+        return getHeight() - 17;
+    }
+
     private String words() {
         String linked = state.linked() < 0 ? "" : TEXTS.of("stop.linked", state.linked());
         String outdated = state.outdated() == 0 ? "" : TEXTS.of("stop.outdated", state.outdated());
@@ -59,7 +69,7 @@ final class StopCell extends Painted {
 
     private void pressed(int x, int y, ChainListener listener) {
         requestFocusInWindow();
-        if (y >= THREAD - 10 && y <= THREAD + 10 && state.linked() > 0) {
+        if (y >= thread() - 10 && y <= thread() + 10 && state.linked() > 0) {
             listener.linked(position);
         } else if (ringFrom >= 0 && x >= ringFrom && (slashFrom < 0 || x < slashFrom) && y > 30) {
             listener.filter(position, StateName.OUTDATED);
@@ -85,6 +95,9 @@ final class StopCell extends Painted {
                     22,
                     getWidth() - 12.0);
             counts(pen);
+            if (getHeight() > 96) {
+                ticks(pen);
+            }
             thread(pen);
             pen.level(Ink.STRONG, 0, getWidth(), getHeight() - 1.0);
             if (open) {
@@ -114,6 +127,14 @@ final class StopCell extends Painted {
         return pen.text(Integer.toString(count), Type.SMALL, Ink.INK2, x + 22, 46);
     }
 
+    /** A short upright line for each record, over the view's time. */
+    private void ticks(Pen pen) {
+        double room = getWidth() - 2.0 * INSET - 8;
+        for (double at : ticks) {
+            pen.fill(Ink.INK2.color(), Math.rint(INSET + at * room), 58, 1, 6);
+        }
+    }
+
     private void thread(Pen pen) {
         int from = threadStarts ? INSET : 0;
         if (state.linked() < 0 || (state.linked() == 0 && state.here().isEmpty())) {
@@ -122,22 +143,22 @@ final class StopCell extends Painted {
         }
         double end;
         if (state.here().isEmpty()) {
-            pen.fill(Ink.STRONG.color(), INSET + 3.0, THREAD - 4.0, 2, 8);
-            end = pen.text(NumberText.count(state.linked()), Type.SMALL, Ink.INK2, INSET + 14.0, THREAD + 4.0);
+            pen.fill(Ink.STRONG.color(), INSET + 3.0, thread() - 4.0, 2, 8);
+            end = pen.text(NumberText.count(state.linked()), Type.SMALL, Ink.INK2, INSET + 14.0, thread() + 4.0);
         } else {
-            Mark.HERE.paint(pen.graphics(), INSET - 2.0, THREAD - 6.0, 12);
+            Mark.HERE.paint(pen.graphics(), INSET - 2.0, thread() - 6.0, 12);
             String here = Pen.shortened(state.here(), Type.HEAD, getWidth() - 34.0);
-            end = pen.text(here, Type.HEAD, Ink.INK, INSET + 14.0, THREAD + 4.0);
+            end = pen.text(here, Type.HEAD, Ink.INK, INSET + 14.0, thread() + 4.0);
         }
         if (!threadStarts) {
-            pen.level(Ink.STRONG, 0, INSET - 4.0, THREAD);
+            pen.level(Ink.STRONG, 0, INSET - 4.0, thread());
         }
-        pen.level(Ink.STRONG, end + 8, getWidth(), THREAD);
+        pen.level(Ink.STRONG, end + 8, getWidth(), thread());
     }
 
     private void dots(Pen pen, int from) {
         for (int x = from + 2; x < getWidth() - 2; x += 6) {
-            pen.fill(Ink.RULE.color(), x, THREAD, 1, 1);
+            pen.fill(Ink.RULE.color(), x, thread(), 1, 1);
         }
     }
 

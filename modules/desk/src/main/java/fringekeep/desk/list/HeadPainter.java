@@ -9,6 +9,8 @@ import fringekeep.drawing.NumberText;
 import java.awt.Component;
 import java.awt.Dimension;
 import java.awt.Graphics;
+import java.awt.geom.Path2D;
+import java.util.Optional;
 import java.util.function.Supplier;
 import javax.swing.JTable;
 import javax.swing.table.TableCellRenderer;
@@ -52,13 +54,32 @@ final class HeadPainter extends Painted implements TableCellRenderer {
                 return;
             }
             boolean right = column > 0 && now.heads().get(column - 1).right();
-            String shown = Pen.shortened(text, Type.HEAD, room - 9.0);
-            double x = right ? room - 5 - Lettering.width(shown, Type.HEAD) : column == 0 ? 22 : 5;
-            pen.text(shown, Type.HEAD, Ink.INK, x, 16);
+            Optional<Question.Sort> sort = column == 0
+                    ? Optional.empty()
+                    : now.question()
+                            .flatMap(Question::sort)
+                            .filter(by -> by.column()
+                                    .equals(now.heads().get(column - 1).column()));
+            int arrow = sort.isPresent() ? 9 : 0;
+            String shown = Pen.shortened(text, Type.HEAD, room - 9.0 - arrow);
+            double x = right ? room - 5 - arrow - Lettering.width(shown, Type.HEAD) : column == 0 ? 22 : 5;
+            double end = pen.text(shown, Type.HEAD, Ink.INK, x, 16);
+            sort.ifPresent(by -> arrow(pen, end + 3, by.descending()));
             if (plot != null) {
                 scale(pen, plot, room, width);
             }
         }
+    }
+
+    /** A small triangle: larger values further down, or further up. */
+    private static void arrow(Pen pen, double x, boolean descending) {
+        Path2D path = new Path2D.Double();
+        path.moveTo(x, descending ? 9 : 15);
+        path.lineTo(x + 6, descending ? 9 : 15);
+        path.lineTo(x + 3, descending ? 15 : 9);
+        path.closePath();
+        pen.graphics().setColor(Ink.INK.color());
+        pen.graphics().fill(path);
     }
 
     private static void scale(Pen pen, ListContent.Plot plot, double from, double to) {

@@ -27,9 +27,8 @@ final class ListColumns {
         if (count != content.heads().size() + 2 || width <= 0) {
             return;
         }
-        boolean marks = content.rows().stream()
-                .anyMatch(row -> row instanceof Entry entry && entry.state().isPresent());
-        int free = width - 16 - (marks ? MARK : 0);
+        boolean marks = content.marks();
+        int free = width - (marks ? MARK : 0);
         int plot = content.plot().map(ListContent.Plot::column).orElse(-1);
         int reserved = plot < 0 ? 0 : needed(content, plot + 1) + PLOT;
         free -= reserved;
@@ -38,11 +37,11 @@ final class ListColumns {
             int needed = plotted ? reserved : needed(content, i);
             int given =
                     plotted ? reserved : needed <= free ? needed : free >= 60 && i > 0 && !right(content, i) ? free : 0;
-            free -= plotted ? 0 : given;
+            free = !plotted && given == 0 ? 0 : free - (plotted ? 0 : given);
             set(columns.getColumn(i), given);
         }
         int last = marks ? MARK + Math.max(0, free) : Math.max(0, free);
-        set(columns.getColumn(count - 1), last + 16);
+        set(columns.getColumn(count - 1), last);
     }
 
     private static boolean right(ListContent content, int column) {
@@ -50,9 +49,9 @@ final class ListColumns {
     }
 
     private int needed(ListContent content, int column) {
-        double widest = Math.min(72, Lettering.width(table.getModel().getColumnName(column), Type.HEAD));
+        double widest = Math.min(104, Lettering.width(table.getModel().getColumnName(column), Type.HEAD));
         int seen = 0;
-        for (ListContent.Line line : content.rows()) {
+        for (ListContent.Line line : content.rows().sample()) {
             if (line instanceof Entry entry && seen++ < SAMPLE) {
                 String text = column == 0 ? entry.number() : entry.cells().get(column - 1);
                 widest = Math.max(widest, Lettering.width(text, column == 0 ? Type.BODY_MEDIUM : Type.BODY));

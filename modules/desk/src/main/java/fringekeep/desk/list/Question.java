@@ -13,7 +13,8 @@ import java.util.Set;
  * @param linkedWith only those linked with this record
  * @param words only those found by these words; empty = all
  * @param among only these records
- * @param most rows at most
+ * @param value only those with this value in a column
+ * @param sort order of the rows; empty = as recorded, grouped
  */
 public record Question(
         String kind,
@@ -21,7 +22,8 @@ public record Question(
         Optional<Hash> linkedWith,
         String words,
         Optional<Among> among,
-        int most) {
+        Optional<Value> value,
+        Optional<Sort> sort) {
     /** Records picked by something else than the list, and in which words: {@code taken in now}. */
     public record Among(Set<Hash> records, String words) {
         /** Copies. */
@@ -30,18 +32,56 @@ public record Question(
         }
     }
 
-    /** Without picked records. */
-    public Question(String kind, Optional<StateName> state, Optional<Hash> linkedWith, String words, int most) {
-        this(kind, state, linkedWith, words, Optional.empty(), most);
-    }
+    /**
+     * A value that rows are narrowed to.
+     *
+     * @param column name, or {@code kind:column} of a linked record
+     * @param text the value; empty = those without
+     */
+    public record Value(String column, String text) {}
+
+    /** Order by a column: name, or {@code kind:column}. */
+    public record Sort(String column, boolean descending) {}
 
     /** All records of a kind. */
     public static Question all(String kind) {
-        return new Question(kind, Optional.empty(), Optional.empty(), "", 500);
+        return new Question(
+                kind, Optional.empty(), Optional.empty(), "", Optional.empty(), Optional.empty(), Optional.empty());
     }
 
-    /** The same with more rows. */
-    public Question more() {
-        return new Question(kind, state, linkedWith, words, among, most * 4);
+    /** All records of a kind in a state. */
+    public static Question in(String kind, StateName state) {
+        return new Question(
+                kind, Optional.of(state), Optional.empty(), "", Optional.empty(), Optional.empty(), Optional.empty());
+    }
+
+    /** All records of a kind linked with a record. */
+    public static Question linkedWith(String kind, Optional<Hash> record) {
+        return new Question(kind, Optional.empty(), record, "", Optional.empty(), Optional.empty(), Optional.empty());
+    }
+
+    /** All records of a kind with a value in a column. */
+    public static Question with(String kind, Value value) {
+        return new Question(
+                kind, Optional.empty(), Optional.empty(), "", Optional.empty(), Optional.of(value), Optional.empty());
+    }
+
+    /** The same in another order. */
+    public Question sorted(Optional<Sort> by) {
+        return new Question(kind, state, linkedWith, words, among, value, by);
+    }
+
+    /** By a column upwards, if it is already sorted so downwards, and then as recorded again. */
+    public Question turned(String column) {
+        Optional<Sort> before = sort.filter(by -> by.column().equals(column));
+        return sorted(
+                before.isEmpty()
+                        ? Optional.of(new Sort(column, false))
+                        : before.filter(by -> !by.descending()).map(by -> new Sort(column, true)));
+    }
+
+    /** Whether all records are shown. */
+    public boolean whole() {
+        return state.isEmpty() && linkedWith.isEmpty() && words.isEmpty() && among.isEmpty() && value.isEmpty();
     }
 }

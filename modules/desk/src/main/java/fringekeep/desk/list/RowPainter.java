@@ -7,12 +7,12 @@ import fringekeep.desk.look.Mark;
 import fringekeep.desk.look.Painted;
 import fringekeep.desk.look.Pen;
 import fringekeep.desk.look.Type;
-import fringekeep.desk.session.States;
 import fringekeep.drawing.Lettering;
 import java.awt.Component;
 import java.awt.Font;
 import java.awt.Graphics;
 import java.awt.geom.Path2D;
+import java.util.function.IntPredicate;
 import java.util.function.Supplier;
 import javax.swing.JTable;
 import javax.swing.table.TableCellRenderer;
@@ -21,6 +21,8 @@ import javax.swing.table.TableCellRenderer;
 @SuppressWarnings("serial")
 final class RowPainter extends Painted implements TableCellRenderer {
     private final transient Supplier<ListContent> content;
+    private final transient IntPredicate marks;
+    private boolean marked;
     private transient ListContent.Line line = new Group("", "");
     private int column;
     private boolean selected;
@@ -28,8 +30,9 @@ final class RowPainter extends Painted implements TableCellRenderer {
     private int left;
     private int whole;
 
-    RowPainter(Supplier<ListContent> content) {
+    RowPainter(Supplier<ListContent> content, IntPredicate marks) {
         this.content = content;
+        this.marks = marks;
     }
 
     @Override
@@ -37,6 +40,7 @@ final class RowPainter extends Painted implements TableCellRenderer {
             JTable table, Object value, boolean isSelected, boolean hasFocus, int row, int at) {
         line = content.get().rows().get(row);
         column = at;
+        marked = marks.test(row);
         selected = isSelected;
         focused = hasFocus;
         left = table.getCellRect(row, at, true).x;
@@ -50,15 +54,24 @@ final class RowPainter extends Painted implements TableCellRenderer {
             int width = getWidth();
             int height = getHeight();
             pen.fill(Ink.SHEET.color(), 0, 0, width, height);
-            if (selected) {
+            if (selected || marked) {
                 pen.fill(Ink.SEL.color(), Math.max(0, 16 - left), 0, width, height);
             }
             if (line instanceof Group group) {
                 pen.text(group.text(), Type.GROUP, Ink.INK, 22.0 - left, height - 8.0);
+                double end = whole - 5.0 - left;
+                double at = end - Lettering.width(group.right(), Type.SMALL);
+                if (at > 30.0 - left + Lettering.width(group.text(), Type.GROUP)) {
+                    pen.text(group.right(), Type.SMALL, Ink.INK2, at, height - 8.0);
+                }
                 pen.level(Ink.RULE, Math.max(0, 16 - left), end(width), height - 1.0);
                 return;
             }
-            entry(pen, (Entry) line, width, height);
+            if (line instanceof Entry entry) {
+                entry(pen, entry, width, height);
+            } else if (column == 0) {
+                pen.text("\u2026", Type.BODY, Ink.INK3, 22, height - 7.0);
+            }
             pen.level(Ink.HAIR, Math.max(0, 16 - left), end(width), height - 1.0);
         }
     }
@@ -79,12 +92,15 @@ final class RowPainter extends Painted implements TableCellRenderer {
             if (focused) {
                 pen.fill(Ink.SELRULE.color(), 16, 0, 2, height);
             }
+            if (marked) {
+                pen.fill(Ink.INK.color(), 8, height / 2.0 - 3.5, 6, 6);
+            }
         } else if (column <= entry.cells().size()) {
             cell(pen, entry, width, height, base);
         } else {
-            entry.state().ifPresent(state -> {
-                States.mark(state).paint(pen.graphics(), 4, height / 2.0 - 6.5, 12);
-                pen.fitted(States.word(state), Type.SMALL, Ink.INK, 20, base, width - 20.0);
+            entry.mark().ifPresent(mark -> {
+                mark.mark().paint(pen.graphics(), 4, height / 2.0 - 6.5, 12);
+                pen.fitted(mark.word(), Type.SMALL, Ink.INK, 20, base, width - 20.0);
             });
         }
     }

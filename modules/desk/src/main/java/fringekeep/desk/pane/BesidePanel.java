@@ -6,8 +6,11 @@ import fringekeep.desk.look.Pen;
 import fringekeep.desk.look.Type;
 import fringekeep.desk.pane.RecordPage.Beside;
 import fringekeep.drawing.Lettering;
+import java.awt.Cursor;
 import java.awt.Dimension;
 import java.awt.Graphics;
+import java.awt.event.MouseAdapter;
+import java.awt.event.MouseEvent;
 
 /** Facts of the record whose drawing stands at the left: its label, its mark, its numbers. */
 @SuppressWarnings("serial")
@@ -17,8 +20,18 @@ final class BesidePanel extends Painted {
 
     private final transient Beside beside;
 
-    BesidePanel(Beside beside) {
+    BesidePanel(Beside beside, Runnable follow) {
         this.beside = beside;
+        setName("beside " + beside.label());
+        setCursor(Cursor.getPredefinedCursor(Cursor.HAND_CURSOR));
+        addMouseListener(new MouseAdapter() {
+            @Override
+            public void mousePressed(MouseEvent event) {
+                if (event.getY() < 24) {
+                    follow.run();
+                }
+            }
+        });
         getAccessibleContext().setAccessibleName(beside.label());
     }
 

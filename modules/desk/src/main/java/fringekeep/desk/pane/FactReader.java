@@ -6,21 +6,17 @@ import fringekeep.archive.json.JsonBoolean;
 import fringekeep.archive.json.JsonNumber;
 import fringekeep.archive.json.JsonObject;
 import fringekeep.archive.json.JsonText;
-import fringekeep.archive.problem.ProblemException;
-import fringekeep.archive.quantity.Unit;
-import fringekeep.archive.quantity.Units;
+import fringekeep.desk.look.Texts;
 import fringekeep.desk.session.Clock;
 import fringekeep.drawing.NumberText;
-import java.math.BigDecimal;
 import java.time.Instant;
 import java.time.format.DateTimeParseException;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
-import java.util.regex.Matcher;
+import java.util.Set;
 import java.util.regex.Pattern;
 
 /**
@@ -28,14 +24,18 @@ import java.util.regex.Pattern;
  * its four sorts, estimates, lists of estimates with their covariance, moments, numbers and texts.
  */
 public final class FactReader {
+    private static final Texts TEXTS = new Texts("fringekeep.desk.pane.Texts", FactReader.class);
     private static final int LIST = 8;
+    private static final int DIGITS = 5;
+    private static final String PURE = "1";
+    private static final Set<String> SORTED = Set.of("sort", "si", "u", "model", "from");
     private static final Pattern INSTANT =
             Pattern.compile("[0-9]{4}-[0-9]{2}-[0-9]{2}T[0-9]{2}:[0-9]{2}:[0-9]{2}(\\.[0-9]+)?Z");
-    private static final Pattern BRACKETED = Pattern.compile("\\(([^() ]+)\\)[^()]*$");
-    private static final List<String> NAMED = List.of("W", "J", "Pa", "V", "A", "N", "C", "T", "K", "Ohm", "F");
 
     private final Clock clock;
     private final JsonObject schema;
+    private final FactWords words;
+    private final String part;
     private final Map<String, List<Fact>> groups = new LinkedHashMap<>();
 
     /**
@@ -43,23 +43,27 @@ public final class FactReader {
      *
      * @param clock how moments are shown
      * @param schema schema of the part's value, for units; the empty object where there is none
+     * @param kind whose words are used
+     * @param part name of the part
      */
-    public FactReader(Clock clock, JsonObject schema) {
+    public FactReader(Clock clock, JsonObject schema, String kind, String part) {
         this.clock = clock;
         this.schema = schema;
+        this.words = FactWords.of(kind);
+        this.part = part;
     }
 
     /** Groups of facts; what stands alone comes under the given heading. */
     public List<FactGroup> read(String heading, JsonObject value) {
-        object(heading, "", value, schema, true);
+        object(heading, "", part, value, schema, true);
         return groups.entrySet().stream()
                 .filter(entry -> !entry.getValue().isEmpty())
                 .map(entry -> new FactGroup(entry.getKey(), entry.getValue()))
                 .toList();
     }
 
-    private void object(String group, String prefix, JsonObject value, JsonObject at, boolean top) {
-        if (estimates(group, value)) {
+    private void object(String group, String prefix, String path, JsonObject value, JsonObject at, boolean top) {
+        if (estimates(group, path, value)) {
             value = value.without("estimates")
                     .without("names")
                     .without("values")
@@ -67,29 +71,47 @@ public final class FactReader {
                     .without("units");
         }
         for (Map.Entry<String, Json> member : value.members().entrySet()) {
-            String name = prefix.isEmpty() ? words(member.getKey()) : prefix + " " + words(member.getKey());
-            JsonObject below = property(at, member.getKey());
-            any(group, name, member.getValue(), below, top);
+            String below = path + "." + member.getKey();
+            if (!words.hidden(below)) {
+                String own = words.label(below, member.getKey());
+                String name = prefix.isEmpty() || own.isEmpty() ? prefix + own : prefix + " " + own;
+                any(group, name, below, member.getValue(), property(at, member.getKey()), top);
+            }
         }
     }
 
-    private void any(String group, String name, Json value, JsonObject at, boolean top) {
+    private void any(String group, String name, String path, Json value, JsonObject at, boolean top) {
         if (value instanceof JsonObject object) {
-            Optional<Fact> whole = whole(name, object, at);
+            Optional<Fact> whole = whole(name, path, object, at);
             if (whole.isPresent()) {
                 add(group, whole.get());
-                further(group, name, object, whole.get().unit());
+                further(group, name, path, object, at);
             } else {
-                object(top ? name : group, top ? "" : name, object, at, false);
+                object(top ? name : group, top ? "" : name, path, object, at, false);
             }
         } else if (value instanceof JsonArray array) {
-            array(top ? name : group, group, name, array, at);
+            array(top ? name : group, group, name, path, array, at);
         } else {
-            add(group, Fact.text(name, instantOr(plain(value))).withUnit(unit(at)));
+            add(group, single(name, path, value, at));
         }
     }
 
-    private void array(String inner, String group, String name, JsonArray array, JsonObject at) {
+    /** A number with its unit, or a text; one of a list of codes in plain words. */
+    private Fact single(String name, String path, Json value, JsonObject at) {
+        if (value instanceof JsonNumber number) {
+            FactUnits.Sized unit = FactUnits.sized(FactUnits.of(at), number.value());
+            String text = number.asInteger().isPresent() && unit.size() == 1
+                    ? NumberText.count(number.asInteger().getAsLong())
+                    : NumberText.significant(
+                            unit.of(number.value()), words.digits(path).orElse(DIGITS));
+            return new Fact(name, "", text, unit.shown());
+        }
+        String text = plain(value);
+        boolean code = !at.array("enum").items().isEmpty() && text.indexOf('/') < 0;
+        return Fact.text(name, code ? words.value(path, text).replace('-', ' ') : instantOr(text));
+    }
+
+    private void array(String inner, String group, String name, String path, JsonArray array, JsonObject at) {
         List<Json> items = array.items();
         JsonObject itemSchema = at.object("items").orElse(JsonObject.EMPTY);
         if (items.isEmpty()) {
@@ -102,38 +124,41 @@ public final class FactReader {
         for (int i = 0; i < items.size() && i < 40; i++) {
             if (items.get(i) instanceof JsonObject item) {
                 String own = item.text("name").orElse("");
-                String title = own.isEmpty() ? singular(name) + " " + (i + 1) : own;
-                named(inner, title, own.isEmpty() ? item : item.without("name"), itemSchema);
+                String title = own.isEmpty() ? (singular(name) + " " + (i + 1)).strip() : own;
+                named(inner, title, path, own.isEmpty() ? item : item.without("name"), itemSchema);
             }
         }
     }
 
     /** A named thing with one quantity or value is one row; others become rows with the name before them. */
-    private void named(String group, String title, JsonObject item, JsonObject at) {
-        Optional<Fact> whole = whole(title, item, at);
+    private void named(String group, String title, String path, JsonObject item, JsonObject at) {
+        Optional<Fact> whole = whole(title, path, item, at);
         if (whole.isPresent()) {
             add(group, whole.get());
         } else if (item.members().size() == 1) {
             Map.Entry<String, Json> only = item.members().entrySet().iterator().next();
-            any(group, title, only.getValue(), property(at, only.getKey()), false);
+            any(group, title, path + "." + only.getKey(), only.getValue(), property(at, only.getKey()), false);
         } else {
-            objectOrLine(group, title, item, at);
+            objectOrLine(group, title, path, item, at);
         }
     }
 
     /** A thing of texts and numbers only is one line. */
-    private void objectOrLine(String group, String title, JsonObject item, JsonObject at) {
+    private void objectOrLine(String group, String title, String path, JsonObject item, JsonObject at) {
         boolean flat = item.members().values().stream()
                 .noneMatch(value -> value instanceof JsonObject || value instanceof JsonArray);
         if (!flat) {
-            object(group, title, item, at, false);
+            object(group, title, path, item, at, false);
             return;
         }
         List<String> line = new ArrayList<>();
         item.members().forEach((name, value) -> {
-            String text = plain(value);
-            if (!text.isEmpty()) {
-                line.add(value instanceof JsonText ? text : words(name) + " " + text);
+            String below = path + "." + name;
+            Fact fact = single(words.label(below, name), below, value, property(at, name));
+            boolean pure = value instanceof JsonText && fact.value().equals(PURE);
+            if (!words.hidden(below) && !fact.value().isEmpty() && !pure) {
+                String text = fact.unit().isEmpty() ? fact.value() : fact.value() + " " + fact.unit();
+                line.add(value instanceof JsonText ? text : (fact.name() + " " + text).strip());
             }
         });
         add(group, Fact.text(title, String.join(", ", line)));
@@ -149,8 +174,8 @@ public final class FactReader {
         return String.join(", ", words);
     }
 
-    /** An object that is one value: a quantity, an estimate, a moment. */
-    private Optional<Fact> whole(String name, JsonObject object, JsonObject at) {
+    /** An object that is one value: a quantity, an estimate, a number of a told sort, a moment. */
+    private Optional<Fact> whole(String name, String path, JsonObject object, JsonObject at) {
         if (object.text("text").isPresent()
                 && object.number("si").isPresent()
                 && object.object("uncertainty").isPresent()) {
@@ -158,25 +183,63 @@ public final class FactReader {
         }
         if (object.number("value").isPresent()
                 && object.members().values().stream().allMatch(JsonNumber.class::isInstance)) {
+            double value = object.number("value").getAsDouble();
             double u = object.number("u").orElse(Double.NaN);
-            String unit = object.text("unit").map(FactReader::shown).orElseGet(() -> unit(at));
-            return Optional.of(new Fact(
-                    name, "", NumberText.measured(object.number("value").getAsDouble(), u), unit));
+            String code = object.text("unit").map(FactUnits::shown).orElseGet(() -> FactUnits.of(at));
+            FactUnits.Sized unit = FactUnits.sized(code, value);
+            return Optional.of(new Fact(name, "", NumberText.measured(unit.of(value), unit.of(u)), unit.shown()));
+        }
+        if (object.text("sort").isPresent()
+                && SORTED.containsAll(object.members().keySet())) {
+            return Optional.of(sorted(name, path, object, at));
         }
         if (object.text("at").isPresent() && object.text("offset").isPresent()) {
-            return Optional.of(Fact.text(name, moment(object.text("at").get())));
+            String known = object.text("known").orElse("");
+            String moment = moment(object.text("at").get());
+            return Optional.of(Fact.text(
+                    name,
+                    known.isEmpty()
+                            ? moment
+                            : moment + ", "
+                                    + words.value(path + ".known", known).replace('-', ' ')));
         }
         return Optional.empty();
     }
 
+    /** A number and how it is meant: an exposure of each point, a period that was kept. */
+    private Fact sorted(String name, String path, JsonObject object, JsonObject at) {
+        String sort = object.text("sort").orElse("");
+        String meant = words.value(path + ".sort", sort).replace('-', ' ');
+        if (object.number("si").isEmpty()) {
+            return Fact.text(name, meant);
+        }
+        double si = object.number("si").getAsDouble();
+        double u = object.number("u").orElse(Double.NaN);
+        String code = words.unit(path, sort).orElseGet(() -> FactUnits.of(property(at, "si")));
+        FactUnits.Sized unit = FactUnits.sized(code, si);
+        String value =
+                u > 0 ? NumberText.measured(unit.of(si), unit.of(u)) : NumberText.significant(unit.of(si), DIGITS);
+        return new Fact(name, "", value, (unit.shown() + " " + meant).strip());
+    }
+
     /** Numbers beside a value and its uncertainty, such as statistical and shared parts or the ends of an interval. */
-    private void further(String group, String name, JsonObject object, String unit) {
+    private void further(String group, String name, String path, JsonObject object, JsonObject at) {
         if (object.number("value").isEmpty()) {
             return;
         }
-        object.members().forEach((member, value) -> {
-            if (value instanceof JsonNumber number && !member.equals("value") && !member.equals("u")) {
-                add(group, new Fact(name + ", " + words(member), "", NumberText.significant(number.value(), 3), unit));
+        String code = object.text("unit").map(FactUnits::shown).orElseGet(() -> FactUnits.of(at));
+        FactUnits.Sized unit = FactUnits.sized(code, object.number("value").getAsDouble());
+        object.members().forEach((member, other) -> {
+            String below = path + "." + member;
+            boolean more = !member.equals("value") && !member.equals("u") && !words.hidden(below);
+            if (more && other instanceof JsonNumber number) {
+                add(
+                        group,
+                        new Fact(
+                                name + ", " + words.label(below, member),
+                                "",
+                                NumberText.significant(unit.of(number.value()), 3),
+                                unit.shown()));
             }
         });
     }
@@ -194,7 +257,7 @@ public final class FactReader {
         }
     }
 
-    private static Fact quantity(String name, JsonObject quantity) {
+    private Fact quantity(String name, JsonObject quantity) {
         JsonObject uncertainty = quantity.object("uncertainty").orElse(JsonObject.EMPTY);
         String unit = quantity.text("unit").orElse("1");
         double si = quantity.number("si").orElse(Double.NaN);
@@ -203,34 +266,39 @@ public final class FactReader {
         String stated = sort.equals("stated")
                 ? text + " \u00B1 " + uncertainty.text("text").orElse("")
                 : text;
-        String shown = shown(unit);
+        String shown = FactUnits.shown(unit);
         String entered = (shown.isEmpty() ? stated : stated + " " + shown) + (sort.equals("exact") ? " exact" : "");
+        FactUnits.Sized sized = FactUnits.sized(FactUnits.si(unit), si);
         String value =
                 switch (sort) {
                     case "stated" ->
-                        NumberText.measured(si, uncertainty.number("si").orElse(Double.NaN));
-                    case "exact" -> NumberText.significant(si, 6) + " exact";
-                    case "bounds" -> bounds(uncertainty);
-                    default -> NumberText.significant(si, 6) + " n.s.";
+                        NumberText.measured(
+                                sized.of(si), sized.of(uncertainty.number("si").orElse(Double.NaN)));
+                    case "exact" -> NumberText.significant(sized.of(si), 6) + " exact";
+                    case "bounds" -> bounds(uncertainty, sized);
+                    default -> NumberText.significant(sized.of(si), 6) + " " + TEXTS.of("unstated");
                 };
-        return new Fact(name, entered, value, siUnit(unit));
+        return new Fact(name, entered, value, sized.shown());
     }
 
-    private static String bounds(JsonObject uncertainty) {
-        Optional<String> lower = uncertainty.number("lower").isPresent()
-                ? Optional.of(NumberText.significant(uncertainty.number("lower").getAsDouble(), 6))
-                : Optional.empty();
-        Optional<String> upper = uncertainty.number("upper").isPresent()
-                ? Optional.of(NumberText.significant(uncertainty.number("upper").getAsDouble(), 6))
-                : Optional.empty();
+    private static String bounds(JsonObject uncertainty, FactUnits.Sized unit) {
+        Optional<String> lower = end(uncertainty, "lower", unit);
+        Optional<String> upper = end(uncertainty, "upper", unit);
         if (lower.isPresent() && upper.isPresent()) {
             return lower.get() + " to " + upper.get();
         }
         return lower.map(low -> "> " + low).orElseGet(() -> "< " + upper.orElse(""));
     }
 
+    private static Optional<String> end(JsonObject uncertainty, String which, FactUnits.Sized unit) {
+        return uncertainty.number(which).isPresent()
+                ? Optional.of(
+                        NumberText.significant(unit.of(uncertainty.number(which).getAsDouble()), 6))
+                : Optional.empty();
+    }
+
     /** Estimates beside their covariance (lower triangle by rows): one row each. */
-    private boolean estimates(String group, JsonObject value) {
+    private boolean estimates(String group, String path, JsonObject value) {
         JsonArray names = value.array("estimates").items().isEmpty() ? value.array("names") : value.array("estimates");
         JsonArray values = value.array("values");
         JsonArray covariance = value.array("covariance");
@@ -248,8 +316,16 @@ public final class FactReader {
                 value.array("units").items().stream().map(FactReader::plain).toList();
         for (int i = 0; i < n; i++) {
             double u = Math.sqrt(covariance.numbers()[i * (i + 1) / 2 + i]);
-            String unit = i < units.size() ? shown(units.get(i)) : "";
-            add(group, new Fact(words(names.texts().get(i)), "", NumberText.measured(values.numbers()[i], u), unit));
+            String unit = i < units.size() ? FactUnits.shown(units.get(i)) : "";
+            add(
+                    group,
+                    new Fact(
+                            words.label(
+                                    path + ".estimates." + names.texts().get(i),
+                                    names.texts().get(i)),
+                            "",
+                            NumberText.measured(values.numbers()[i], u),
+                            unit));
         }
         return true;
     }
@@ -280,55 +356,6 @@ public final class FactReader {
         return schema.object("properties").flatMap(all -> all.object(name)).orElse(JsonObject.EMPTY);
     }
 
-    /** Unit of a number: named by the schema, or told in brackets at the end of its description. */
-    private static String unit(JsonObject schema) {
-        return schema.text("siUnit")
-                .or(() -> schema.text("unit"))
-                .or(() -> schema.text("description").flatMap(FactReader::bracketed))
-                .map(FactReader::shown)
-                .orElse("");
-    }
-
-    private static Optional<String> bracketed(String description) {
-        Matcher matcher = BRACKETED.matcher(description);
-        return matcher.find() ? Optional.of(matcher.group(1)).filter(FactReader::isUnit) : Optional.empty();
-    }
-
-    private static boolean isUnit(String code) {
-        try {
-            Units.parse(code);
-            return true;
-        } catch (ProblemException e) {
-            return false; // other words in brackets
-        }
-    }
-
-    private static String shown(String code) {
-        try {
-            String text = Units.parse(code).shown();
-            return text.equals("1") ? "" : text;
-        } catch (ProblemException e) {
-            return code; // a unit of a newer kind: shown as it stands
-        }
-    }
-
-    /** The SI unit of a quantity in the words of the trade: W, not m2.kg.s-3. */
-    private static String siUnit(String code) {
-        try {
-            Unit unit = Units.parse(code);
-            for (String name : NAMED) {
-                Unit named = Units.of(name);
-                if (named.sameDimension(unit) && named.toSi(BigDecimal.ONE) == 1) {
-                    return named.shown();
-                }
-            }
-            String si = unit.siCode();
-            return si.equals("1") || si.isEmpty() ? "" : shown(si);
-        } catch (ProblemException e) {
-            return "SI"; // a unit of a newer kind
-        }
-    }
-
     private static String singular(String name) {
         if (name.endsWith("ies") && !name.endsWith("series")) {
             return name.substring(0, name.length() - 3) + "y";
@@ -336,18 +363,5 @@ public final class FactReader {
         return name.endsWith("s") && !name.endsWith("ss") && !name.endsWith("series")
                 ? name.substring(0, name.length() - 1)
                 : name;
-    }
-
-    /** Words of a member name: {@code molarMass} becomes "molar mass". */
-    static String words(String name) {
-        StringBuilder words = new StringBuilder();
-        for (int i = 0; i < name.length(); i++) {
-            char c = name.charAt(i);
-            if (Character.isUpperCase(c)) {
-                words.append(' ');
-            }
-            words.append(c);
-        }
-        return words.toString().toLowerCase(Locale.ROOT).replace('-', ' ').strip();
     }
 }

@@ -8,13 +8,17 @@ import fringekeep.desk.look.Type;
 import fringekeep.drawing.Lettering;
 import java.awt.Dimension;
 import java.awt.Graphics;
+import java.util.List;
+import java.util.regex.Pattern;
 
 /** Ruled facts under a heading: name, as entered, SI value, unit. */
 @SuppressWarnings("serial")
-final class FactsPanel extends Painted {
+final class FactsPanel extends Painted implements FactColumn {
     private static final Texts TEXTS = new Texts("fringekeep.desk.pane.Texts", FactsPanel.class);
     private static final int ROW = 22;
     private static final int HEAD = 24;
+    private static final int MORE = 18;
+    private static final Pattern WORDS = Pattern.compile("[a-z]{2}");
 
     private final transient FactGroup group;
 
@@ -33,20 +37,40 @@ final class FactsPanel extends Painted {
         getAccessibleContext().setAccessibleDescription(words.toString());
     }
 
-    /** Whether it wants the room of two columns. */
-    boolean wide() {
+    @Override
+    public boolean wide() {
         return group.entered()
                 || group.facts().stream()
-                        .anyMatch(fact -> Lettering.width(fact.name() + fact.value() + fact.unit(), Type.BODY) > 210);
+                        .anyMatch(fact -> !fact.unit().isEmpty()
+                                && Lettering.width(fact.name() + fact.value() + fact.unit(), Type.BODY) > 200);
     }
 
-    int height() {
-        return HEAD + ROW * group.facts().size() + 12;
+    @Override
+    public int heightIn(int width) {
+        int height = HEAD + 12;
+        for (Fact fact : group.facts()) {
+            height += rowHeight(fact, width);
+        }
+        return height;
+    }
+
+    private int rowHeight(Fact fact, int width) {
+        int lines = lines(fact, width).size();
+        return ROW + MORE * (fact.name().isEmpty() ? Math.max(0, lines - 1) : lines);
+    }
+
+    /** A text that has no room behind its name stands below it, in as many lines as it takes. */
+    private List<String> lines(Fact fact, int width) {
+        boolean behind =
+                Lettering.width(fact.name(), Type.BODY) + Lettering.width(fact.value(), Type.BODY) + 14 <= width;
+        return behind || !fact.unit().isEmpty() || !fact.entered().isEmpty()
+                ? List.of()
+                : Lines.of(fact.value(), Type.BODY, width - (fact.name().isEmpty() ? 0.0 : 12.0), 12);
     }
 
     @Override
     public Dimension getPreferredSize() {
-        return new Dimension(224, height());
+        return new Dimension(224, heightIn(Math.max(224, getWidth())));
     }
 
     @Override
@@ -64,8 +88,13 @@ final class FactsPanel extends Painted {
             pen.level(Ink.RULE, 0, width, HEAD - 1.0);
             double y = HEAD;
             for (Fact fact : group.facts()) {
-                row(pen, fact, y, width, unitAt, entered ? enteredAt : -1);
-                y += ROW;
+                List<String> lines = lines(fact, width);
+                if (lines.isEmpty()) {
+                    row(pen, fact, y, width, unitAt, entered ? enteredAt : -1);
+                } else {
+                    below(pen, fact, lines, y, width);
+                }
+                y += rowHeight(fact, width);
             }
         }
     }
@@ -78,8 +107,29 @@ final class FactsPanel extends Painted {
         return widest == 0 ? -10 : widest + 2;
     }
 
+    private static void below(Pen pen, Fact fact, List<String> lines, double y, int width) {
+        double base = y + ROW - 7;
+        boolean named = !fact.name().isEmpty();
+        pen.fitted(fact.name(), Type.BODY, Ink.INK2, 0, base, width);
+        base += named ? MORE : 0;
+        for (String line : lines) {
+            pen.text(line, Type.BODY, Ink.INK, named ? 12 : 0, base);
+            base += MORE;
+        }
+        pen.level(Ink.HAIR, 0, width, base - MORE + 6);
+    }
+
     private static void row(Pen pen, Fact fact, double y, int width, double unitAt, double enteredAt) {
         double base = y + ROW - 7;
+        if (fact.unit().isEmpty()
+                && fact.entered().isEmpty()
+                && WORDS.matcher(fact.value()).find()) {
+            double at = width - Lettering.width(fact.value(), Type.BODY);
+            pen.fitted(fact.name(), Type.BODY, Ink.INK2, 0, base, at - 8);
+            pen.text(fact.value(), Type.BODY, Ink.INK, at, base);
+            pen.level(Ink.HAIR, 0, width, y + ROW - 1);
+            return;
+        }
         String value = Pen.shortened(fact.value(), Type.BODY, enteredAt < 0 ? unitAt - 50 : unitAt - enteredAt - 20);
         double valueAt = unitAt - 10 - Lettering.width(value, Type.BODY);
         double nameRoom = (enteredAt < 0 ? valueAt : enteredAt) - 8;

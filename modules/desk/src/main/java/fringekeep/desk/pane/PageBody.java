@@ -9,7 +9,6 @@ import java.awt.Graphics;
 import java.awt.Rectangle;
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Optional;
 import javax.swing.JComponent;
 import javax.swing.Scrollable;
 
@@ -18,22 +17,29 @@ import javax.swing.Scrollable;
 final class PageBody extends Painted implements Scrollable {
     private static final int GAP = 24;
     private static final int COLUMN = 224;
+    private static final int WIDE = 1250;
+    private static final int NARROWEST = 90;
 
     private final transient List<PictureView> pictures = new ArrayList<>();
     private final transient List<JComponent> facts = new ArrayList<>();
-    private transient Optional<BesidePanel> beside = Optional.empty();
+    private final transient List<BesidePanel> besides = new ArrayList<>();
+    private final transient List<TablePanel> tables = new ArrayList<>();
     private int height = 10;
     private int sight = 500;
 
-    void show(List<PictureView> views, Optional<BesidePanel> next, List<JComponent> groups) {
+    void show(List<PictureView> views, List<BesidePanel> beside, List<TablePanel> ruled, List<JComponent> groups) {
         removeAll();
         pictures.clear();
         pictures.addAll(views);
-        beside = next;
+        besides.clear();
+        besides.addAll(beside);
+        tables.clear();
+        tables.addAll(ruled);
         facts.clear();
         facts.addAll(groups);
         views.forEach(this::add);
-        next.ifPresent(this::add);
+        beside.forEach(this::add);
+        ruled.forEach(this::add);
         groups.forEach(this::add);
         revalidate();
         repaint();
@@ -54,18 +60,20 @@ final class PageBody extends Painted implements Scrollable {
         height = lay(getWidth(), true);
     }
 
-    private int lay(int width, boolean move) {
+    private int lay(int whole, boolean move) {
+        int aside = whole >= WIDE ? asideWidth() : 0;
+        int width = whole - aside;
         int y = 8;
         boolean narrow = width < 520;
-        int besideWidth = beside.isPresent() && !narrow ? BesidePanel.WIDTH + GAP : 0;
+        int besideWidth = !besides.isEmpty() && !narrow ? BesidePanel.WIDTH + GAP : 0;
         int pictureWidth = Math.max(100, width - besideWidth);
         int besideBottom = y;
-        if (beside.isPresent()) {
-            Dimension size = beside.get().getPreferredSize();
+        for (BesidePanel beside : besides) {
+            int tall = beside.getPreferredSize().height;
             if (move) {
-                beside.get().setBounds(width - BesidePanel.WIDTH, y, BesidePanel.WIDTH, size.height);
+                beside.setBounds(width - BesidePanel.WIDTH, besideBottom, BesidePanel.WIDTH, tall);
             }
-            besideBottom = y + size.height;
+            besideBottom += tall + 8;
         }
         for (PictureView picture : pictures) {
             int tall = tall(picture, pictureWidth);
@@ -74,8 +82,47 @@ final class PageBody extends Painted implements Scrollable {
             }
             y += tall + 10;
         }
-        y = Math.max(y, besideBottom + 10);
-        return columns(width, y, move);
+        y = narrow ? y + besideBottom : y;
+        Room room = new Room(width, y, Math.max(y, besideBottom + 6), besideWidth);
+        tables(room, move);
+        int foot = columns(room, move);
+        return aside > 0 ? Math.max(foot, aside(whole, aside - GAP, move)) : late(foot, width, move);
+    }
+
+    /** Where the next parts go: beside the column of numbers as long as that goes on, over the whole width below it. */
+    private static final class Room {
+        private final int width;
+        private final int free;
+        private final int taken;
+        private int top;
+
+        Room(int width, int top, int free, int taken) {
+            this.width = width;
+            this.top = top;
+            this.free = free;
+            this.taken = taken;
+        }
+
+        /** Width at the top; a little room left beside the numbers is passed over. */
+        int width() {
+            if (top + NARROWEST >= free) {
+                top = Math.max(top, free);
+            }
+            return top < free ? width - taken : width;
+        }
+    }
+
+    private void tables(Room room, boolean move) {
+        for (TablePanel table : tables) {
+            if (table.late()) {
+                continue;
+            }
+            int width = Math.min(room.width(), Math.max(2 * COLUMN, (int) (1.2 * table.neededWidth())));
+            if (move) {
+                table.setBounds(0, room.top, width, table.height());
+            }
+            room.top += table.height() + 6;
+        }
     }
 
     /** A drawing keeps its shape on paper, but one row of panels takes no more than about half of what is in sight. */
@@ -87,13 +134,49 @@ final class PageBody extends Painted implements Scrollable {
         return (int) Math.max(220, Math.min(wanted, most));
     }
 
-    private int columns(int width, int top, boolean move) {
+    private int asideWidth() {
+        return tables.stream()
+                .filter(TablePanel::late)
+                .mapToInt(table -> Math.min(420, table.neededWidth()) + GAP)
+                .max()
+                .orElse(0);
+    }
+
+    private int aside(int whole, int width, boolean move) {
+        int y = 8;
+        for (TablePanel table : tables) {
+            if (table.late()) {
+                if (move) {
+                    table.setBounds(whole - width, y, width, table.height());
+                }
+                y += table.height() + 6;
+            }
+        }
+        return y;
+    }
+
+    private int late(int top, int width, boolean move) {
+        int y = top;
+        for (TablePanel table : tables) {
+            if (table.late()) {
+                if (move) {
+                    table.setBounds(0, y, Math.min(width, table.neededWidth() + 60), table.height());
+                }
+                y += table.height() + 6;
+            }
+        }
+        return y;
+    }
+
+    private int columns(Room room, boolean move) {
+        int width = room.width();
         int count = Math.max(1, (width + GAP) / (COLUMN + GAP));
         int column = (width - GAP * (count - 1)) / count;
         int[] foot = new int[count];
-        java.util.Arrays.fill(foot, top);
+        java.util.Arrays.fill(foot, room.top);
         for (JComponent group : facts) {
-            int wide = group instanceof FactsPanel panel && panel.wide() && count > 1 ? 2 : 1;
+            FactColumn asking = (FactColumn) group;
+            int wide = asking.wide() && count > 1 ? 2 : 1;
             int best = 0;
             for (int i = 0; i + wide <= count; i++) {
                 if (level(foot, i, wide) < level(foot, best, wide)) {
@@ -101,15 +184,16 @@ final class PageBody extends Painted implements Scrollable {
                 }
             }
             int y = level(foot, best, wide);
-            int tall = group.getPreferredSize().height;
+            int given = column * wide + GAP * (wide - 1);
+            int tall = asking.heightIn(given);
             if (move) {
-                group.setBounds(best * (column + GAP), y, column * wide + GAP * (wide - 1), tall);
+                group.setBounds(best * (column + GAP), y, given, tall);
             }
             for (int i = best; i < best + wide; i++) {
                 foot[i] = y + tall + 6;
             }
         }
-        return level(foot, 0, count);
+        return Math.max(level(foot, 0, count), room.free);
     }
 
     private static int level(int[] foot, int from, int count) {

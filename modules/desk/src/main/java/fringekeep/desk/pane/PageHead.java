@@ -22,6 +22,7 @@ final class PageHead extends Painted {
     private transient List<PageAction> actions = List.of();
     private final transient List<Rectangle> places = new ArrayList<>();
     private transient Optional<RecordPage> page = Optional.empty();
+    private String size = "";
 
     PageHead() {
         MouseAdapter mouse = new MouseAdapter() {
@@ -49,7 +50,18 @@ final class PageHead extends Painted {
         return Optional.empty();
     }
 
+    /** Says by how much the record moves. */
+    void size(String words) {
+        size = words;
+        getAccessibleContext()
+                .setAccessibleDescription(getAccessibleContext().getAccessibleDescription() + "; " + words);
+        repaint();
+    }
+
     void show(RecordPage next, List<PageAction> what) {
+        if (page.filter(one -> one.record().equals(next.record())).isEmpty()) {
+            size = "";
+        }
         page = Optional.of(next);
         actions = List.copyOf(what);
         getAccessibleContext().setAccessibleName(next.label());
@@ -60,10 +72,27 @@ final class PageHead extends Painted {
         repaint();
     }
 
+    private List<String> identity(int width) {
+        return page.map(one -> Lines.of(one.identity(), Type.BODY, width, 2)).orElse(List.of());
+    }
+
+    private List<String> lines(Sentence state, int width) {
+        String more = state.mark() == fringekeep.desk.look.Mark.RING && !size.isEmpty() ? ". " + size : "";
+        return Lines.of(state.text() + more, Type.BODY, width - 17.0, 3);
+    }
+
+    /** Height that title, identity and states need in a width. */
+    int heightIn(int width) {
+        int lines = identity(width).size();
+        for (Sentence state : page.map(RecordPage::states).orElse(List.of())) {
+            lines += lines(state, width).size();
+        }
+        return 42 + 18 * Math.max(1, lines);
+    }
+
     @Override
     public Dimension getPreferredSize() {
-        int states = page.map(one -> one.states().size()).orElse(0);
-        return new Dimension(400, 60 + 18 * states);
+        return new Dimension(400, heightIn(Math.max(400, getWidth())));
     }
 
     @Override
@@ -77,12 +106,17 @@ final class PageHead extends Painted {
             double end = pen.text(now.label(), Type.TITLE, Ink.INK, 0, 29);
             pen.text(now.record().shortForm(), Type.MONO, Ink.INK3, end + 16, 28);
             actions(pen);
-            pen.fitted(now.identity(), Type.BODY, Ink.INK, 0, 51, getWidth());
-            double y = 69;
+            double y = 51;
+            for (String line : identity(getWidth())) {
+                pen.text(line, Type.BODY, Ink.INK, 0, y);
+                y += 18;
+            }
             for (Sentence state : now.states()) {
                 state.mark().paint(pen.graphics(), 0, y - 10, 12);
-                pen.fitted(state.text(), Type.BODY, Ink.INK, 17, y, getWidth() - 17.0);
-                y += 18;
+                for (String line : lines(state, getWidth())) {
+                    pen.text(line, Type.BODY, Ink.INK, 17, y);
+                    y += 18;
+                }
             }
         }
     }

@@ -15,7 +15,8 @@ import java.util.Optional;
  * @param identity one sentence
  * @param states one sentence per state
  * @param pictures drawings
- * @param beside facts of the record drawn with it (a scan's fit), if any
+ * @param besides facts of the record drawn with it (a scan's fit), then those of others of its like in short
+ * @param tables tables of its kind
  * @param groups its own facts
  * @param notes judgements and notes that speak of it
  * @param knots its lineage from left to right
@@ -26,7 +27,8 @@ public record RecordPage(
         String identity,
         List<Sentence> states,
         List<Picture> pictures,
-        Optional<Beside> beside,
+        List<Beside> besides,
+        List<PageTable> tables,
         List<FactGroup> groups,
         List<Note> notes,
         List<Knot> knots) {
@@ -34,6 +36,8 @@ public record RecordPage(
     public RecordPage {
         states = List.copyOf(states);
         pictures = List.copyOf(pictures);
+        besides = List.copyOf(besides);
+        tables = List.copyOf(tables);
         groups = List.copyOf(groups);
         notes = List.copyOf(notes);
         knots = List.copyOf(knots);
@@ -47,8 +51,22 @@ public record RecordPage(
         }
     }
 
-    /** A judgement or a note. */
-    public record Note(Hash record, Optional<Mark> mark, String text, String small) {}
+    /**
+     * A judgement or a note.
+     *
+     * @param text what, in a few words
+     * @param small when, by whom, and the words
+     * @param files files that came with it
+     */
+    public record Note(Hash record, Optional<Mark> mark, String text, String small, List<Attached> files) {
+        /** Copies. */
+        public Note {
+            files = List.copyOf(files);
+        }
+    }
+
+    /** An attached file: what it was called, and its bytes by hash. */
+    public record Attached(String name, Hash raw) {}
 
     /**
      * A place of the lineage line.

@@ -12,8 +12,6 @@ import java.awt.Graphics;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
-import java.util.function.Consumer;
-import java.util.function.Supplier;
 import javax.swing.BorderFactory;
 import javax.swing.JComponent;
 import javax.swing.JScrollPane;
@@ -26,24 +24,17 @@ public final class RecordPane extends Painted {
     private static final int FOOT = 60;
 
     private final PageHead head = new PageHead();
-    private final transient Supplier<List<PageAction>> actions;
+    private final transient PaneEar ear;
     private final PageBody body = new PageBody();
     private final JScrollPane scroll = new JScrollPane(body);
     private final LineageLine line;
-    private final transient Consumer<Picture> save;
     private transient Optional<RecordPage> page = Optional.empty();
 
-    /**
-     * A pane.
-     *
-     * @param actions what can be done with the record in hand, asked each time one is shown
-     * @param go told when a knot of the lineage line is followed
-     * @param save told when a drawing is to be saved
-     */
-    public RecordPane(Supplier<List<PageAction>> actions, Consumer<List<Hash>> go, Consumer<Picture> save) {
-        this.actions = actions;
-        this.line = new LineageLine(go);
-        this.save = save;
+    /** A pane that tells a listener what a person does. */
+    public RecordPane(PaneEar ear) {
+        this.ear = ear;
+        this.line = new LineageLine(ear::follow);
+        setName("record");
         setOpaque(true);
         setFocusable(true);
         scroll.getViewport().setOpaque(false);
@@ -73,18 +64,21 @@ public final class RecordPane extends Painted {
     }
 
     private void fill(RecordPage next, boolean same) {
-        head.show(next, actions.get());
+        head.show(next, ear.actions());
         line.show(next.knots());
         List<PictureView> views = new ArrayList<>();
         for (Picture picture : next.pictures()) {
-            views.add(new PictureView(picture, Ink::theme, save));
+            views.add(new PictureView(picture, Ink::theme, ear::save));
         }
         List<JComponent> groups = new ArrayList<>();
         next.groups().forEach(group -> groups.add(new FactsPanel(group)));
         if (!next.notes().isEmpty()) {
-            groups.add(Math.min(2, groups.size()), new NotesPanel(next.notes()));
+            groups.add(Math.min(2, groups.size()), new NotesPanel(next.notes(), ear));
         }
-        body.show(views, next.beside().map(BesidePanel::new), groups);
+        List<BesidePanel> besides = next.besides().stream()
+                .map(beside -> new BesidePanel(beside, () -> ear.follow(List.of(beside.record()))))
+                .toList();
+        body.show(views, besides, next.tables().stream().map(TablePanel::new).toList(), groups);
         if (!same) {
             scroll.getVerticalScrollBar().setValue(0);
         }
@@ -93,6 +87,24 @@ public final class RecordPane extends Painted {
     /** The record shown. */
     public Optional<RecordPage> page() {
         return page;
+    }
+
+    /** Says by how much the record in hand moves, behind its state. */
+    public void size(Hash record, String words) {
+        if (page.filter(one -> one.record().equals(record)).isPresent()) {
+            head.size(words);
+            revalidate();
+        }
+    }
+
+    /** Gives the focus to the lineage line at the foot. */
+    public void focusLine() {
+        line.requestFocusInWindow();
+    }
+
+    /** Whether the lineage line has the focus. */
+    public boolean lineFocused() {
+        return line.isFocusOwner();
     }
 
     /** Gives the focus to the first drawing, or to the pane. */
@@ -108,7 +120,7 @@ public final class RecordPane extends Painted {
     @Override
     public void doLayout() {
         int width = getWidth();
-        int top = head.getPreferredSize().height;
+        int top = head.heightIn(width);
         int foot = getHeight() - FOOT - 4;
         head.setBounds(0, 0, width, top);
         scroll.setBounds(0, top, width, Math.max(10, foot - top));

@@ -75,6 +75,35 @@ public final class Clock {
                 + MONTHS.get(day.getMonthValue() - 1) + " " + day.getYear();
     }
 
+    /** {@code 10 to 14 Mar 2025}, {@code 28 Feb to 2 Mar 2025}. */
+    public static String words(LocalDate from, LocalDate to) {
+        String last = to.getDayOfMonth() + " " + MONTHS.get(to.getMonthValue() - 1) + " " + to.getYear();
+        String first = Integer.toString(from.getDayOfMonth());
+        if (from.getYear() != to.getYear()) {
+            first += " " + MONTHS.get(from.getMonthValue() - 1) + " " + from.getYear();
+        } else if (from.getMonthValue() != to.getMonthValue()) {
+            first += " " + MONTHS.get(from.getMonthValue() - 1);
+        }
+        return from.equals(to) ? words(to) : first + " to " + last;
+    }
+
+    /** {@code 14 Mar}. */
+    public String dayAndMonth(Instant at) {
+        ZonedDateTime local = at.atZone(zone);
+        return local.getDayOfMonth() + " " + MONTHS.get(local.getMonthValue() - 1);
+    }
+
+    /** When a measurement day begins. */
+    public Instant begin(LocalDate day) {
+        return day.atTime(boundary).atZone(zone).toInstant();
+    }
+
+    /** {@code 06:00 to 06:00}. */
+    public String boundaries() {
+        String at = two(boundary.getHour()) + ":" + two(boundary.getMinute());
+        return at + " to " + at;
+    }
+
     private static String two(int number) {
         return number < 10 ? "0" + number : Integer.toString(number);
     }

@@ -70,7 +70,10 @@ public final class States {
             case OUTDATED -> causes(archive, clock, graph.causes(record));
             case CORRECTED ->
                 graph.current(record)
-                        .map(now -> TEXTS.of("corrected.by", archive.label(now), since(archive, clock, now)))
+                        .map(now -> TEXTS.of(
+                                "corrected.by",
+                                Names.shortLabel(archive.label(now), clock),
+                                since(archive, clock, now)))
                         .orElseGet(() -> word(state));
             case WITHDRAWN, MASKED, DOUBTED, PREFERRED -> judged(archive, graph, clock, record, state);
             case DISPUTED -> TEXTS.of("disputed");
@@ -104,9 +107,18 @@ public final class States {
         return TEXTS.of(
                         key,
                         since(archive, clock, cause.by()),
-                        Names.named(archive, cause.upstream()),
-                        archive.label(cause.by()))
+                        Names.named(archive, cause.upstream(), clock),
+                        by(archive, clock, cause))
                 + more;
+    }
+
+    /** The number alone where the kind was just said, else the whole label. */
+    private static String by(Archive archive, Clock clock, Cause cause) {
+        String label = Names.shortLabel(archive.label(cause.by()), clock);
+        String upstream = archive.label(cause.upstream());
+        int space = upstream.indexOf(' ');
+        String kind = space < 0 ? upstream : upstream.substring(0, space + 1);
+        return label.startsWith(kind) ? label.substring(kind.length()) : label;
     }
 
     private static String since(Archive archive, Clock clock, Hash record) {

@@ -92,6 +92,19 @@ public final class Stops {
         return words(table.getProperty(kind + "." + what, ""));
     }
 
+    /** How many digits a column's numbers have where no uncertainty says it. */
+    public Map<String, Integer> digits() {
+        Map<String, Integer> digits = new HashMap<>();
+        for (String name : table.stringPropertyNames()) {
+            if (name.startsWith("digits.")) {
+                digits.put(
+                        name.substring("digits.".length()),
+                        Integer.parseInt(table.getProperty(name).strip()));
+            }
+        }
+        return Map.copyOf(digits);
+    }
+
     private static List<String> words(String list) {
         return Arrays.stream(list.split(","))
                 .map(String::strip)

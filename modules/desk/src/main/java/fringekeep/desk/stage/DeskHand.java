@@ -23,6 +23,11 @@ public interface DeskHand {
     /** What is selected. */
     DeskSelection selection();
 
+    /** The kind whose list is open, also while the list is empty. */
+    default Optional<String> openKind() {
+        return selection().kind();
+    }
+
     /**
      * Runs a job away from the window thread, with progress at the foot of the window. A newer job for the same place stops
      * the older one. Problems are shown under the strip.

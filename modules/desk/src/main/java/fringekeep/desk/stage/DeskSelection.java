@@ -9,13 +9,14 @@ import java.util.Optional;
  *
  * @param archiveOpen whether an archive is open
  * @param kind kind of the selected records
- * @param records all selected records, all of that kind, in the list's order; the one in hand among them
+ * @param records all selected records, all of that kind, in the list's order: those marked with Space, else the selected rows,
+ *     the one in hand among them
  * @param inHand the record shown in the pane
  */
 public record DeskSelection(boolean archiveOpen, Optional<String> kind, List<Hash> records, Optional<Hash> inHand) {
     /** Copies. */
     public DeskSelection {
-        records = List.copyOf(records);
+        records = records instanceof LazyRecords ? records : List.copyOf(records);
     }
 
     /** Whether the selected records are of one of these kinds. */

@@ -21,6 +21,9 @@ public interface DeskStage {
         return List.of();
     }
 
+    /** An archive was opened and read: time to offer what was left unfinished. */
+    default void opened(DeskHand hand) {}
+
     /**
      * Files were dropped on the window while an archive is open.
      *

@@ -10,7 +10,10 @@ import fringekeep.desk.chain.ChainStrip;
 import fringekeep.desk.lineage.RawCounts;
 import fringekeep.desk.lineage.ReadSheet;
 import fringekeep.desk.lineage.RuledSheet;
+import fringekeep.desk.list.Joined;
 import fringekeep.desk.list.ListContent;
+import fringekeep.desk.list.ListEar;
+import fringekeep.desk.list.PagedRows;
 import fringekeep.desk.list.Question;
 import fringekeep.desk.list.ReadList;
 import fringekeep.desk.list.RecordList;
@@ -18,18 +21,24 @@ import fringekeep.desk.look.Ink;
 import fringekeep.desk.look.Mark;
 import fringekeep.desk.look.Texts;
 import fringekeep.desk.pane.PageAction;
+import fringekeep.desk.pane.PaneEar;
 import fringekeep.desk.pane.ReadRecord;
+import fringekeep.desk.pane.RecordPage;
 import fringekeep.desk.pane.RecordPane;
 import fringekeep.desk.part.ProgressLine;
 import fringekeep.desk.part.TroubleLine;
 import fringekeep.desk.run.Progress;
 import fringekeep.desk.run.Runner;
+import fringekeep.desk.session.InView;
 import fringekeep.desk.session.Register;
 import fringekeep.desk.session.Stops;
+import fringekeep.desk.session.View;
+import fringekeep.desk.session.Views;
 import fringekeep.desk.stage.DeskAction;
 import fringekeep.desk.stage.DeskHand;
 import fringekeep.desk.stage.DeskSelection;
 import fringekeep.desk.stage.DeskSheet;
+import fringekeep.desk.stage.SizeOfChange;
 import fringekeep.drawing.NumberText;
 import java.awt.BorderLayout;
 import java.awt.CardLayout;
@@ -40,6 +49,7 @@ import java.util.Deque;
 import java.util.List;
 import java.util.Optional;
 import javax.swing.JPanel;
+import org.openide.util.Lookup;
 
 /**
  * All that stands between menu line and the window's foot: strip, sheets, status line, and the way from one to the other.
@@ -58,6 +68,7 @@ public final class Desk extends JPanel {
     private final TwoPanes panes;
     private final RuledSheet lineage;
     private final FirstSheet first;
+    private final FoundingPane founding;
     private final KeysSheet keysSheet = new KeysSheet();
     private final TroubleLine caution = new TroubleLine();
     private final ProgressLine progress;
@@ -72,10 +83,16 @@ public final class Desk extends JPanel {
     private final transient Deque<Place> history = new ArrayDeque<>();
     private transient Optional<Archive> archive = Optional.empty();
     private transient Optional<Register> register = Optional.empty();
+    private transient Optional<Views> views = Optional.empty();
+    private transient Optional<InView> inView = Optional.empty();
+    private transient Optional<Joined> joined = Optional.empty();
+    private transient View view = View.ALL;
+    private transient Optional<InView> ticked = Optional.empty();
     private transient Optional<DeskSheet> sheet = Optional.empty();
     private transient Place place;
     private String doneWords = "";
     private int paneInSheet = 1;
+    private transient List<Problem> trouble = List.of();
     private String card = "first";
     private String cardBeforeKeys = "first";
 
@@ -85,26 +102,23 @@ public final class Desk extends JPanel {
         this.runner = runner;
         this.stops = stops;
         this.memory = memory;
-        this.stages = stages;
+        this.stages = stages.with(new ViewStage(this));
         this.progress = new ProgressLine(one -> runner.stop(one.place()));
         this.hand = new Hand(this, runner, host, memory);
         this.persons = new DeskPersons(runner, memory, host, this::showStatus);
         this.place = start(stops);
         this.strip = new ChainStrip(ChainState.empty(stops), new StripEar());
-        this.list = new RecordList(this::select, this::enterRecord, this::ask);
-        this.record = new RecordPane(this::pageActions, this::follow, host::save);
+        this.list = new RecordList(new RowsEar());
+        this.record = new RecordPane(new RecordEar(host));
         this.panes = new TwoPanes(list, record, width -> memory.put("list width", Integer.toString(width)));
         this.lineage =
                 new RuledSheet(strip::columns, ReadList.plurals(stops), this::selectInSheet, this::open, this::back);
-        this.first = new FirstSheet(host::chooseArchive, host::foundArchive);
+        this.first = new FirstSheet(host::tryInvented, host::chooseArchive, this::askToFound);
+        this.founding = new FoundingPane(host::foundArchive, host::chooseFolder, this::leaveFounding);
         assemble();
         new DeskKeys(this).bind();
         runner.onTrouble(problems -> {
-            if (archive.isPresent()) {
-                caution.show(problems);
-            } else {
-                host.trouble(problems);
-            }
+            say(problems);
         });
         runner.onProgress(this::showProgress);
         showStatus();
@@ -123,20 +137,27 @@ public final class Desk extends JPanel {
     private void assemble() {
         top.add(strip, BorderLayout.CENTER);
         top.add(caution, BorderLayout.SOUTH);
-        top.setVisible(false);
+        strip.setVisible(false);
         JPanel foot = new JPanel(new BorderLayout());
         foot.add(progress, BorderLayout.NORTH);
         foot.add(status, BorderLayout.SOUTH);
         sheets.add(first, "first");
+        sheets.add(founding, "found");
         sheets.add(panes, "records");
         sheets.add(lineage, "lineage");
         sheets.add(keysSheet, "keys");
         sheets.add(stageRoom, "stage");
         stageRoom.setOpaque(false);
-        keysSheet.add(stages.keys());
+        keysSheet.add(this.stages.keys());
         add(top, BorderLayout.NORTH);
         add(sheets, BorderLayout.CENTER);
         add(foot, BorderLayout.SOUTH);
+        strip.addComponentListener(new java.awt.event.ComponentAdapter() {
+            @Override
+            public void componentResized(java.awt.event.ComponentEvent event) {
+                showTicks();
+            }
+        });
         memory.get("list width").ifPresent(width -> panes.listWidth(width(width)));
         setBackground(Ink.SHEET.color());
     }
@@ -156,7 +177,8 @@ public final class Desk extends JPanel {
         closeArchive();
         archive = Optional.of(next);
         next.onCommit(watermark -> javax.swing.SwingUtilities.invokeLater(this::refresh));
-        top.setVisible(true);
+        strip.setVisible(true);
+        say(List.of());
         strip.show(ChainState.empty(stops), place.stop());
         strip.inView(
                 next.facts().title(),
@@ -165,6 +187,8 @@ public final class Desk extends JPanel {
                         : next.facts().zone());
         showCard("records");
         persons.open(archive);
+        views = Optional.of(new Views(next, stops));
+        preview(next);
         refresh();
     }
 
@@ -176,13 +200,29 @@ public final class Desk extends JPanel {
         archive = Optional.empty();
         persons.open(archive);
         register = Optional.empty();
+        views = Optional.empty();
+        inView = Optional.empty();
+        joined = Optional.empty();
+        view = View.ALL;
         history.clear();
         place = start(stops);
         record.show(Optional.empty());
         list.show(ListContent.NOTHING, Optional.empty());
-        top.setVisible(false);
+        strip.setVisible(false);
+        say(List.of());
         showCard("first");
         showStatus();
+    }
+
+    /** Asks what an archive is founded with. */
+    void askToFound() {
+        showCard("found");
+        founding.focusFirst();
+    }
+
+    private void leaveFounding() {
+        showCard(archive.isPresent() ? "records" : "first");
+        focusRows();
     }
 
     /** Closes the archive before the program ends; waits until its last words are written. */
@@ -202,33 +242,118 @@ public final class Desk extends JPanel {
         return archive;
     }
 
-    /** Reads all anew, as after a commit. */
-    void refresh() {
-        archive.ifPresent(open -> runner.run("register", work -> Register.read(open, stops), this::arrived));
+    /** While the graph is still being read: counts, and the first page of the last stop that has records. */
+    private void preview(Archive open) {
+        if (open.graphReady()) {
+            return;
+        }
+        runner.run("preview", work -> ChainState.counted(open, stops), counted -> {
+            if (register.isEmpty()) {
+                int filled = filled(i -> counted.stops().get(i).count());
+                place = place.at(filled, Question.all(stops.all().get(filled).kind()));
+                strip.show(counted, filled);
+                runner.run(
+                        "list",
+                        work -> ReadList.preview(open, stops, place.question()),
+                        content -> list.show(content, Optional.empty()));
+            }
+        });
     }
 
-    private void arrived(Register next) {
-        register = Optional.of(next);
-        caution.show(List.of());
-        if (place.inHand().isEmpty()) {
-            place = new Place(firstFilled(next), place.question(), Optional.empty(), place.sheet(), place.root());
-            place = new Place(
-                    place.stop(),
-                    Question.all(stops.all().get(place.stop()).kind()),
-                    Optional.empty(),
-                    place.sheet(),
-                    place.root());
+    /** Reads what is new, as after a commit. */
+    void refresh() {
+        View wanted = view;
+        archive.ifPresent(open -> views.ifPresent(all -> runner.run(
+                "register",
+                work -> all.of(
+                        register.isPresent() ? register.get().newer(open, stops) : Register.read(open, stops), wanted),
+                this::arrived)));
+    }
+
+    private void arrived(InView next) {
+        if (!next.view().equals(view)) {
+            refresh();
+            return;
+        }
+        boolean first = register.isEmpty();
+        register = Optional.of(next.register());
+        joined = archive.map(open -> new Joined(open, next.register()));
+        shown(next);
+        say(List.of());
+        if (first && place.inHand().isEmpty()) {
+            int filled = filled(i -> next.current(stops.all().get(i).kind()));
+            place = place.at(filled, Question.all(stops.all().get(filled).kind()));
         }
         ask(place.question());
         place.inHand().ifPresent(this::read);
         sheet.ifPresent(DeskSheet::recorded);
+        if (first) {
+            stages.all().forEach(stage -> stage.opened(hand));
+        }
         showStatus();
     }
 
+    private void shown(InView next) {
+        inView = Optional.of(next);
+        strip.inView(next.name(), next.detail());
+        showTicks();
+    }
+
+    /** Ticks of what is in view, where there is room for them and they are not there yet. */
+    private void showTicks() {
+        if (strip.wide() && !ticked.equals(inView)) {
+            ticked = inView;
+            views.ifPresent(all -> inView.ifPresent(now -> runner.run("ticks", work -> all.ticks(now), strip::ticks)));
+        }
+    }
+
+    /** The stops of the strip. */
+    Stops stops() {
+        return stops;
+    }
+
+    /** What is in view. */
+    View view() {
+        return view;
+    }
+
+    /** Views of the open archive. */
+    Optional<Views> views() {
+        return views;
+    }
+
+    /** Brings something else in view: strip, list and thread follow. */
+    void view(View next) {
+        if (archive.isEmpty() || register.isEmpty()) {
+            return;
+        }
+        view = next;
+        Register known = register.get();
+        views.ifPresent(all -> runner.run("view", work -> all.of(known, next), now -> {
+            if (now.view().equals(view)) {
+                shown(now);
+                showViewed();
+            }
+        }));
+    }
+
+    /** Stays at the open stop if it has something in view, else goes to the last one that has. */
+    private void showViewed() {
+        InView now = inView.orElseThrow();
+        String kind = stops.all().get(place.stop()).kind();
+        int stop = now.current(kind) > 0
+                ? place.stop()
+                : filled(i -> now.current(stops.all().get(i).kind()));
+        place = place.at(stop, Question.all(stops.all().get(stop).kind()));
+        showCard("records");
+        ask(place.question());
+        list.focusRows();
+    }
+
     /** The last stop that has records: figures where there are any. */
-    private int firstFilled(Register next) {
+    private int filled(java.util.function.IntUnaryOperator count) {
         for (int i = stops.all().size() - 1; i >= 0; i--) {
-            if (!next.records(stops.all().get(i).kind()).isEmpty()) {
+            if (count.applyAsInt(i) > 0) {
                 return i;
             }
         }
@@ -256,11 +381,32 @@ public final class Desk extends JPanel {
     private void ask(Question question) {
         place = new Place(
                 stops.of(question.kind()).orElse(place.stop()), question, place.inHand(), place.sheet(), place.root());
-        both((open, known) ->
-                runner.run("list", work -> new ReadList(open, known, stops).read(question, work), this::listArrived));
+        List<String> columns = columns(question.kind());
+        reading((reader, work) -> reader.read(question, columns, work), "list", this::listArrived);
+    }
+
+    private interface Reading<T> {
+        T read(ReadList reader, fringekeep.archive.problem.Work work)
+                throws fringekeep.archive.problem.ProblemException, fringekeep.archive.problem.StoppedException;
+    }
+
+    /** Runs a job over what is in view now. */
+    private <T> void reading(Reading<T> job, String where, java.util.function.Consumer<T> done) {
+        archive.ifPresent(open -> inView.ifPresent(now -> joined.ifPresent(rows ->
+                runner.run(where, work -> job.read(new ReadList(open, now, stops, rows), work), done))));
+    }
+
+    private List<String> columns(String kind) {
+        return memory.get("columns " + kind)
+                .map(text -> List.of(text.split(",")))
+                .orElse(List.of());
     }
 
     private void listArrived(ListContent content) {
+        reading(
+                (reader, work) -> reader.furtherWords(content, work),
+                "list words",
+                more -> more.ifPresent(list::words));
         list.show(content, place.inHand());
         boolean listed = list.selected().isPresent();
         if (!listed && place.sheet() == Place.Sheet.RECORDS) {
@@ -289,22 +435,26 @@ public final class Desk extends JPanel {
     }
 
     private void read(Hash next) {
-        both((open, known) -> runner.run("record", work -> new ReadRecord(open, known, stops).read(next), page -> {
-            record.show(page);
-            panes.retie();
-        }));
+        archive.ifPresent(open -> joined.ifPresent(rows ->
+                runner.run("record", work -> new ReadRecord(open, rows.register(), stops, rows).read(next), page -> {
+                    record.show(page);
+                    panes.retie();
+                })));
     }
 
     private void showChain() {
-        both((open, known) -> runner.run(
+        archive.ifPresent(open -> inView.ifPresent(now -> runner.run(
                 "chain",
-                work -> ChainState.of(open, known, stops, place.inHand()),
-                state -> strip.show(state, place.stop())));
+                work -> ChainState.of(open, now, stops, place.inHand()),
+                state -> strip.show(state, place.stop()))));
     }
 
     /** Opens a record: its stop, its list, its pane. */
     void open(Hash next) {
         remember();
+        if (inView.filter(now -> !now.contains(next)).isPresent()) {
+            view(View.ALL);
+        }
         register.flatMap(known -> known.kind(next)).ifPresent(kind -> {
             place = new Place(
                     stops.of(kind).orElse(place.stop()),
@@ -329,7 +479,7 @@ public final class Desk extends JPanel {
 
     private void openLinked(int stop) {
         remember();
-        Question linked = new Question(stops.all().get(stop).kind(), Optional.empty(), place.inHand(), "", 500);
+        Question linked = Question.linkedWith(stops.all().get(stop).kind(), place.inHand());
         place = new Place(stop, linked, place.inHand(), Place.Sheet.RECORDS, Optional.empty());
         showCard("records");
         ask(linked);
@@ -356,6 +506,25 @@ public final class Desk extends JPanel {
         place = place.holding(next);
         showChain();
         archive.ifPresent(open -> runner.run("raw", work -> RawCounts.read(open, next), lineage::showRaw));
+    }
+
+    /** Works out by how much the record in hand would move, and says it behind its state. */
+    void sizeOfChange() {
+        Optional<Hash> wanted = place.inHand();
+        Optional<SizeOfChange> size = Optional.ofNullable(Lookup.getDefault().lookup(SizeOfChange.class));
+        if (wanted.isEmpty() || size.isEmpty() || archive.isEmpty()) {
+            return;
+        }
+        Archive open = archive.get();
+        record.size(wanted.get(), TEXTS.of("size.working"));
+        runner.run(
+                "size of change",
+                work -> size.get().sentence(open, wanted.get(), work),
+                words -> record.size(wanted.get(), words),
+                problems -> {
+                    record.size(wanted.get(), "");
+                    say(problems);
+                });
     }
 
     private List<PageAction> pageActions() {
@@ -439,6 +608,7 @@ public final class Desk extends JPanel {
 
     /** Says what could not be done. */
     void say(List<Problem> problems) {
+        trouble = List.copyOf(problems);
         caution.show(problems);
     }
 
@@ -481,17 +651,19 @@ public final class Desk extends JPanel {
         }
     }
 
-    /** Looks for words. */
+    /** Looks for a number, and if there is none, for words: what they find is in view then. */
     void find(String words) {
         if (words.isBlank()) {
-            ask(Question.all(place.question().kind()));
+            view(View.ALL);
             return;
         }
-        archive.ifPresent(open -> runner.run("find", work -> open.find(words), this::open, problems -> {
-            showCard("records");
-            place = place.on(Place.Sheet.RECORDS, Optional.empty());
-            ask(new Question(place.question().kind(), Optional.empty(), Optional.empty(), words, 500));
-        }));
+        archive.ifPresent(open -> runner.run(
+                "find", work -> open.find(words), this::open, problems -> view(new View.Found(words.strip()))));
+    }
+
+    /** Opens the choice of what is in view. */
+    void chooseView() {
+        archive.ifPresent(open -> show(new ViewSheet(this, hand)));
     }
 
     // ---- focus
@@ -512,7 +684,13 @@ public final class Desk extends JPanel {
         }
         switch (card) {
             case "lineage" -> lineage.focusRows();
-            case "records" -> list.focusRows();
+            case "records" -> {
+                if (list.table().isFocusOwner()) {
+                    list.clearMarks();
+                }
+                list.focusRows();
+            }
+            case "found" -> founding.focusFirst();
             case "stage" ->
                 sheet.ifPresent(one -> {
                     if (!one.escape()) {
@@ -539,8 +717,8 @@ public final class Desk extends JPanel {
         }
         List<Runnable> panesInOrder = card.equals("lineage")
                 ? List.of(strip::focusOpen, lineage::focusRows)
-                : List.of(strip::focusOpen, list::focusRows, record::focusPage);
-        int now = isIn(focus, strip) ? 0 : isIn(focus, record) ? 2 : 1;
+                : List.of(strip::focusOpen, list::focusRows, record::focusPage, record::focusLine);
+        int now = isIn(focus, strip) ? 0 : record.lineFocused() ? 3 : isIn(focus, record) ? 2 : 1;
         panesInOrder.get(Math.floorMod(now + by, panesInOrder.size())).run();
     }
 
@@ -601,6 +779,9 @@ public final class Desk extends JPanel {
                     if (!doneWords.isEmpty()) {
                         left.add(doneWords);
                     }
+                    if (card.equals("records") && list.markedCount() > 1) {
+                        left.add(TEXTS.of("status.marked", NumberText.count(list.markedCount())));
+                    }
                     sheet.filter(one -> card.equals("stage"))
                             .ifPresentOrElse(
                                     one -> left.addAll(one.hints()),
@@ -616,6 +797,11 @@ public final class Desk extends JPanel {
     }
 
     // ---- for tests
+
+    /** What is said to be wrong. */
+    public List<Problem> trouble() {
+        return trouble;
+    }
 
     /** What stands below the strip: first, records, lineage, keys, or the name of a stage's sheet. */
     public String sheetShown() {
@@ -672,7 +858,7 @@ public final class Desk extends JPanel {
             remember();
             showCard("records");
             place = place.on(Place.Sheet.RECORDS, Optional.empty());
-            ask(new Question(stops.all().get(stop).kind(), Optional.of(state), Optional.empty(), "", 500));
+            ask(Question.in(stops.all().get(stop).kind(), state));
         }
 
         @Override
@@ -681,8 +867,100 @@ public final class Desk extends JPanel {
         }
 
         @Override
+        public void chooseView() {
+            Desk.this.chooseView();
+        }
+
+        @Override
         public void find(String words) {
             Desk.this.find(words);
+        }
+    }
+
+    /** What a person does in the list. */
+    private final class RowsEar implements ListEar {
+        @Override
+        public void select(Hash next) {
+            Desk.this.select(next);
+        }
+
+        @Override
+        public void marked() {
+            showStatus();
+        }
+
+        @Override
+        public void enter() {
+            enterRecord();
+        }
+
+        @Override
+        public void ask(Question question) {
+            Desk.this.ask(question);
+        }
+
+        @Override
+        public void page(PagedRows rows, int page) {
+            runner.run(
+                    "list page", work -> rows.read(page, work), lines -> list.arrived(rows, page, lines), problems -> {
+                        list.arrived(rows, page, List.of());
+                        say(problems);
+                    });
+        }
+
+        @Override
+        public void copy(ListContent content, List<Hash> records) {
+            reading((reader, work) -> reader.table(content, records, work), "copy", text -> {
+                java.awt.Toolkit.getDefaultToolkit()
+                        .getSystemClipboard()
+                        .setContents(new java.awt.datatransfer.StringSelection(text), null);
+                done(TEXTS.of("copied", NumberText.count(records.size())));
+            });
+        }
+
+        @Override
+        public void columns(String kind, List<String> columns) {
+            memory.put("columns " + kind, String.join(",", columns));
+            Desk.this.ask(place.question());
+        }
+
+        @Override
+        public List<ListContent.Head> offered(String kind) {
+            return archive.map(open -> ReadList.offered(open, stops, kind)).orElse(List.of());
+        }
+    }
+
+    /** What a person does with the record in hand. */
+    private final class RecordEar implements PaneEar {
+        private final DeskHost host;
+
+        RecordEar(DeskHost host) {
+            this.host = host;
+        }
+
+        @Override
+        public List<PageAction> actions() {
+            return pageActions();
+        }
+
+        @Override
+        public void follow(List<Hash> records) {
+            Desk.this.follow(records);
+        }
+
+        @Override
+        public void save(fringekeep.drawing.Picture picture) {
+            host.save(picture);
+        }
+
+        @Override
+        public void save(RecordPage.Attached file) {
+            new AttachedFiles(hand).save(file);
+        }
+
+        @Override
+        public void open(RecordPage.Attached file) {
+            new AttachedFiles(hand).open(file);
         }
     }
 }

@@ -13,8 +13,11 @@ interface DeskHost {
     /** A person wants to open an archive. */
     void chooseArchive();
 
-    /** A person wants to found an archive. */
-    void foundArchive();
+    /** A person founds an archive. */
+    void foundArchive(FoundingPane.Answers answers);
+
+    /** A person wants to try the invented laboratory. */
+    void tryInvented();
 
     /** A drawing is to be saved. */
     void save(Picture picture);

@@ -92,7 +92,8 @@ final class DeskPersons {
                 });
     }
 
-    private static PersonId fresh() {
+    /** A new person's id. */
+    static PersonId fresh() {
         return new PersonId(UUID.randomUUID().toString().replace("-", "").toLowerCase(Locale.ROOT));
     }
 }

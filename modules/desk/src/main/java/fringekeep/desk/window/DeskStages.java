@@ -28,6 +28,13 @@ final class DeskStages {
         stages.forEach(stage -> actions.addAll(stage.actions()));
     }
 
+    /** The same with one more. */
+    DeskStages with(DeskStage more) {
+        List<DeskStage> all = new ArrayList<>(stages);
+        all.add(more);
+        return new DeskStages(all);
+    }
+
     /** Those that modules announce. */
     static DeskStages announced() {
         return new DeskStages(Lookup.getDefault().lookupAll(DeskStage.class));

@@ -7,6 +7,7 @@ import fringekeep.desk.look.Texts;
 import fringekeep.desk.look.Type;
 import fringekeep.desk.part.WordButton;
 import java.awt.Graphics;
+import java.util.List;
 
 /** What stands in the window while no archive is open: what the program is for, and the ways in. */
 @SuppressWarnings("serial")
@@ -14,22 +15,26 @@ final class FirstSheet extends Painted {
     private static final Texts TEXTS = new Texts("fringekeep.desk.window.Texts", FirstSheet.class);
 
     private final FirstPicture picture = new FirstPicture();
-    private final WordButton open;
-    private final WordButton found;
+    private final WordButton attempt = new WordButton(TEXTS.of("first.try"), 'T', true);
+    private final WordButton found = new WordButton(TEXTS.of("first.found"), 'F', false);
+    private final WordButton open = new WordButton(TEXTS.of("first.open"), 'O', false);
 
-    FirstSheet(Runnable openArchive, Runnable foundArchive) {
-        open = new WordButton(TEXTS.of("first.open"), 'O', true);
-        found = new WordButton(TEXTS.of("first.found"), 'F', false);
+    FirstSheet(Runnable tryInvented, Runnable openArchive, Runnable foundArchive) {
+        attempt.addActionListener(event -> tryInvented.run());
         open.addActionListener(event -> openArchive.run());
         found.addActionListener(event -> foundArchive.run());
         setOpaque(true);
+        setName("first");
         add(picture);
-        add(open);
-        add(found);
+        for (WordButton button : List.of(attempt, found, open)) {
+            button.setName("first " + button.getText());
+            add(button);
+        }
+        getAccessibleContext().setAccessibleName(TEXTS.of("first.sentence.1") + " " + TEXTS.of("first.sentence.2"));
     }
 
     void focusFirst() {
-        open.requestFocusInWindow();
+        attempt.requestFocusInWindow();
     }
 
     private int left() {
@@ -40,9 +45,11 @@ final class FirstSheet extends Painted {
     public void doLayout() {
         int left = left();
         picture.setBounds(left, 248, Math.min(1500, getWidth() - 2 * left), 216);
-        int y = 526;
-        open.setBounds(left, y, open.getPreferredSize().width, 38);
-        found.setBounds(left + open.getWidth() + 16, y, found.getPreferredSize().width, 38);
+        int x = left;
+        for (WordButton button : List.of(attempt, found, open)) {
+            button.setBounds(x, 526, button.getPreferredSize().width, 38);
+            x += button.getWidth() + 16;
+        }
     }
 
     @Override

@@ -8,6 +8,7 @@ import fringekeep.desk.list.Question;
 import fringekeep.desk.run.Job;
 import fringekeep.desk.run.Runner;
 import fringekeep.desk.session.Register;
+import fringekeep.desk.session.Stops;
 import fringekeep.desk.stage.DeskHand;
 import fringekeep.desk.stage.DeskSelection;
 import fringekeep.desk.stage.DeskSheet;
@@ -48,6 +49,14 @@ final class Hand implements DeskHand {
     }
 
     @Override
+    public Optional<String> openKind() {
+        Stops stops = Stops.shipped();
+        Optional<String> listed = selection().kind();
+        return listed.filter(kind -> stops.of(kind).equals(Optional.of(desk.stopShown())))
+                .or(() -> Optional.of(stops.all().get(desk.stopShown()).kind()));
+    }
+
+    @Override
     public <T> void run(String place, Job<T> job, Consumer<T> done) {
         runner.run(place, job, done);
     }
@@ -85,7 +94,8 @@ final class Hand implements DeskHand {
                 Optional.empty(),
                 "",
                 Optional.of(new Question.Among(new HashSet<>(records), words)),
-                500));
+                Optional.empty(),
+                Optional.empty()));
     }
 
     @Override

@@ -30,7 +30,8 @@ public final class MenuLine {
         bar.setPreferredSize(new Dimension(400, 30));
         JMenu archive = menu(bar, "menu.archive", 'A', desk, DeskMenu.ARCHIVE);
         item(archive, "menu.archive.open", "ctrl O", program::chooseArchive);
-        item(archive, "menu.archive.found", "", program::foundArchive);
+        item(archive, "menu.archive.found", "", desk::askToFound);
+        item(archive, "menu.archive.try", "", program::tryInvented);
         item(archive, "menu.archive.close", "", desk::closeArchive);
         archive.addSeparator();
         stageItems(archive, desk, DeskMenu.ARCHIVE);
@@ -149,6 +150,7 @@ public final class MenuLine {
 
     private static void item(JMenu menu, String key, String stroke, Runnable work) {
         JMenuItem item = new JMenuItem(TEXTS.of(key));
+        item.setName(key);
         if (!stroke.isEmpty()) {
             item.setAccelerator(KeyStroke.getKeyStroke(stroke));
         }

@@ -27,6 +27,11 @@ record Place(int stop, Question question, Optional<Hash> inHand, Sheet sheet, Op
         return new Place(stop, question, Optional.of(record), sheet, root);
     }
 
+    /** Another stop and another list, in the sheet of records; nothing in hand yet that is not listed there. */
+    Place at(int next, Question asked) {
+        return new Place(next, asked, inHand, Sheet.RECORDS, Optional.empty());
+    }
+
     /** The same with another sheet. */
     Place on(Sheet next, Optional<Hash> of) {
         return new Place(stop, question, inHand, next, of);

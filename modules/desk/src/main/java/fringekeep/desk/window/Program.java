@@ -16,6 +16,7 @@ import fringekeep.desk.look.Ink;
 import fringekeep.desk.look.Texts;
 import fringekeep.desk.run.Runner;
 import fringekeep.desk.session.Stops;
+import fringekeep.desk.stage.InventedLab;
 import fringekeep.drawing.Picture;
 import fringekeep.drawing.PictureFiles;
 import java.awt.Window;
@@ -31,6 +32,7 @@ import java.util.function.Supplier;
 import javax.swing.JFileChooser;
 import javax.swing.SwingUtilities;
 import org.openide.LifecycleManager;
+import org.openide.modules.Places;
 import org.openide.util.Lookup;
 
 /** The one desk of the program, and what it needs of files and dialogs. Lives on the window thread. */
@@ -87,6 +89,7 @@ public final class Program implements DeskHost {
                         archive.facts().folder().toAbsolutePath().normalize().equals(whole))
                 .isPresent();
         if (!open) {
+            desk.say(List.of());
             runner.run("open", work -> open(whole, work), archive -> opened(whole, archive), this::trouble);
         }
     }
@@ -134,25 +137,51 @@ public final class Program implements DeskHost {
     }
 
     @Override
-    public void foundArchive() {
-        new FoundingSheet()
-                .ask(
-                        window(),
-                        answers -> runner.run(
-                                "open",
-                                work -> Archives.found(
-                                        answers.folder(),
-                                        new Archives.Founding(
-                                                answers.title(),
-                                                answers.dayBoundary(),
-                                                answers.zone(),
-                                                false,
-                                                List.of(),
-                                                Optional.empty()),
-                                        kinds(),
-                                        Circumstances.real(BUILD)),
-                                archive -> opened(answers.folder(), archive),
-                                this::trouble));
+    public void foundArchive(FoundingPane.Answers answers) {
+        runner.run(
+                "open",
+                work -> {
+                    if (!FoundingPane.free(answers.folder())) {
+                        throw new ProblemException(new Problem(
+                                "desk.folder-taken",
+                                TEXTS.of("found.taken"),
+                                answers.folder().toString(),
+                                TEXTS.of("found.taken.mend")));
+                    }
+                    Person first = new Person(
+                            DeskPersons.fresh(), Optional.of(answers.person()), Optional.empty(), Optional.empty());
+                    return Archives.found(
+                            answers.folder(),
+                            new Archives.Founding(
+                                    answers.title(),
+                                    answers.dayBoundary(),
+                                    answers.zone(),
+                                    false,
+                                    List.of(first),
+                                    Optional.empty()),
+                            kinds(),
+                            Circumstances.real(BUILD));
+                },
+                archive -> opened(answers.folder(), archive),
+                this::trouble);
+    }
+
+    /** Opens the invented laboratory; makes it where it is not there yet. */
+    @Override
+    public void tryInvented() {
+        Path folder = Places.getUserDirectory().toPath().resolve("invented-lab");
+        Optional<InventedLab> maker = Optional.ofNullable(Lookup.getDefault().lookup(InventedLab.class));
+        runner.run(
+                "open",
+                work -> {
+                    if (!Files.exists(folder.resolve("archive.json"))) {
+                        maker.orElseThrow(() -> new IllegalStateException("no module makes the invented laboratory"))
+                                .make(folder, kinds(), BUILD, work);
+                    }
+                    return open(folder, work);
+                },
+                archive -> opened(folder, archive),
+                this::trouble);
     }
 
     @Override
@@ -233,7 +262,7 @@ public final class Program implements DeskHost {
 
     @Override
     public void trouble(List<Problem> problems) {
-        ProblemDialog.show(window(), TEXTS.of("trouble.title"), problems);
+        desk.say(problems);
     }
 
     /** Says something in words. */

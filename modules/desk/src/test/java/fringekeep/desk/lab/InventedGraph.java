@@ -41,6 +41,20 @@ public final class InventedGraph {
         return states.getOrDefault(record, Set.of());
     }
 
+    public Set<Hash> outdated() {
+        Set<Hash> outdated = new LinkedHashSet<>();
+        states.forEach((record, of) -> {
+            if (of.contains(StateName.OUTDATED)) {
+                outdated.add(record);
+            }
+        });
+        return outdated;
+    }
+
+    public List<Hash> rivals(Hash record) {
+        return List.of();
+    }
+
     public List<Cause> causes(Hash record) {
         return causes.getOrDefault(record, List.of());
     }

@@ -2,6 +2,7 @@ package fringekeep.desk.lab;
 
 import fringekeep.archive.Archive;
 import fringekeep.archive.ArchiveFacts;
+import fringekeep.archive.JournalLine;
 import fringekeep.archive.facet.CountTable;
 import fringekeep.archive.facet.TimeSpan;
 import fringekeep.archive.graph.Cause;
@@ -292,7 +293,7 @@ public final class InventedLab {
         return Hash.of(text.getBytes(StandardCharsets.UTF_8));
     }
 
-    private record View(Hash fingerprint, String kind, Map<PartName, JsonObject> parts) implements RecordView {
+    record View(Hash fingerprint, String kind, Map<PartName, JsonObject> parts) implements RecordView {
         @Override
         public Head head() {
             return new Head(
@@ -324,7 +325,7 @@ public final class InventedLab {
         }
     }
 
-    private static final Inputs NONE = new Inputs() {
+    static final Inputs NONE = new Inputs() {
         @Override
         public List<Input> all() {
             return List.of();
@@ -335,6 +336,16 @@ public final class InventedLab {
             return List.of();
         }
     };
+
+    /** The setup. */
+    public Hash setup() {
+        return Objects.requireNonNull(byKind.get("setup")).get(0);
+    }
+
+    /** A scan by its place. */
+    public Hash scan(int place) {
+        return Objects.requireNonNull(byKind.get("scan")).get(place);
+    }
 
     /** The laboratory as an archive. */
     public Archive archive() {
@@ -360,6 +371,10 @@ public final class InventedLab {
                         (long) arguments[1] > 1 ? List.of() : byKind.getOrDefault((String) arguments[0], List.of());
                     case "counts" -> counts();
                     case "list" -> page((Listing) arguments[0]);
+                    case "journalLines" ->
+                        arguments[0] instanceof Instant from
+                                ? journal(from, (Instant) arguments[1])
+                                : journal(Instant.MIN, Instant.MAX);
                     case "graph" -> graph.asGraph();
                     case "graphReady" -> true;
                     case "find" -> find((String) arguments[0]);
@@ -373,6 +388,13 @@ public final class InventedLab {
     /** The graph. */
     public Graph graph() {
         return graph.asGraph();
+    }
+
+    private List<JournalLine> journal(Instant from, Instant to) {
+        return recorded.values().stream()
+                .filter(one -> !one.at().isBefore(from) && one.at().isBefore(to))
+                .map(one -> new JournalLine(one.n(), one.at(), "recorded", Optional.of(one.fingerprint())))
+                .toList();
     }
 
     private Map<String, Long> counts() {

@@ -13,7 +13,7 @@ class FactReaderTest {
     private final Clock clock = new Clock(new InventedLab().archive().facts());
 
     private List<FactGroup> read(JsonObject value) {
-        return new FactReader(clock, JsonObject.EMPTY).read("as entered", value);
+        return new FactReader(clock, JsonObject.EMPTY, "sample", "content").read("as entered", value);
     }
 
     private static JsonObject quantity(String text, String unit, double si, JsonObject uncertainty) {
@@ -48,8 +48,8 @@ class FactReaderTest {
                 .containsExactly(
                         new Fact("dipole", "2.1 V", "< 2.1", "V"),
                         new Fact("dwell", "10 s exact", "10 exact", "s"),
-                        new Fact("oven", "568.9 \u00B0C", "842.05 n.s.", "K"),
-                        new Fact("period", "266.0 \u00B1 0.1 nm", "2.6600(10) \u00D7 10\u207B\u2077", "m"));
+                        new Fact("oven", "568.9 \u00B0C", "842.05 not stated", "K"),
+                        new Fact("period", "266.0 \u00B1 0.1 nm", "266.00(10)", "nm"));
     }
 
     @Test
@@ -87,6 +87,6 @@ class FactReaderTest {
 
     @Test
     void namesOfMembersBecomeWords() {
-        assertThat(FactReader.words("degreesOfFreedom")).isEqualTo("degrees of freedom");
+        assertThat(FactWords.words("degreesOfFreedom")).isEqualTo("degrees of freedom");
     }
 }

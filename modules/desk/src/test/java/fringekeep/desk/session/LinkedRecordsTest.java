@@ -50,8 +50,7 @@ class LinkedRecordsTest {
         assertThat(States.sentences(lab.archive(), lab.graph(), clock, lab.property)
                         .get(0)
                         .text())
-                .isEqualTo(
-                        "outdated since 18 Mar 10:05: calibration 1 (power meter scale) was corrected by calibration 3");
+                .isEqualTo("outdated since 18 Mar 10:05: calibration 1 (power meter scale) was corrected by 3");
         assertThat(States.sentences(lab.archive(), lab.graph(), clock, lab.withdrawn)
                         .get(0)
                         .text())

@@ -5,11 +5,15 @@ import static org.assertj.core.api.Assertions.assertThat;
 import fringekeep.archive.Person;
 import fringekeep.archive.problem.Problem;
 import fringekeep.desk.lab.InventedLab;
+import fringekeep.desk.list.Question;
 import fringekeep.desk.run.Runner;
 import fringekeep.desk.session.Stops;
+import fringekeep.desk.session.View;
 import fringekeep.drawing.Picture;
+import java.awt.event.ActionEvent;
 import java.awt.image.BufferedImage;
 import java.nio.file.Path;
+import java.time.LocalDate;
 import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.List;
@@ -34,7 +38,10 @@ class DeskTest {
         public void chooseArchive() {}
 
         @Override
-        public void foundArchive() {}
+        public void foundArchive(FoundingPane.Answers answers) {}
+
+        @Override
+        public void tryInvented() {}
 
         @Override
         public void save(Picture picture) {}
@@ -110,6 +117,81 @@ class DeskTest {
         desk.find("velocity");
 
         assertThat(desk.listPane().table().getRowCount()).isEqualTo(1);
+    }
+
+    @Test
+    void aDayInViewNarrowsStripListAndComesBackToAll() {
+        desk.open(lab.archive());
+        desk.openStop(6);
+        desk.view(new View.Day(LocalDate.of(2025, 3, 13)));
+
+        assertThat(desk.listPane().content().heading()).isEqualTo("18 scans");
+        desk.open(lab.scan(0));
+        assertThat(desk.view()).isEqualTo(View.ALL);
+        assertThat(desk.listPane().content().heading()).isEqualTo("36 scans");
+    }
+
+    @Test
+    void theChoiceOfViewListsDaysAndFiguresAndShowsWhatIsChosen() {
+        desk.open(lab.archive());
+        desk.chooseView();
+        assertThat(desk.sheetShown()).isEqualTo("view");
+        DeskPictures.paint(desk, 1280, 770);
+
+        desk.view(new View.Upstream(lab.property));
+
+        assertThat(desk.sheetShown()).isEqualTo("records");
+        desk.openStop(7);
+        assertThat(desk.listPane().content().heading()).isEqualTo("36 fits");
+        desk.openStop(9);
+        assertThat(desk.listPane().content().heading()).isEqualTo("0 figures");
+    }
+
+    @Test
+    void spaceMarksRowsAndTheSelectionIsWhatIsMarked() {
+        desk.open(lab.archive());
+        desk.openStop(6);
+        press("SPACE");
+        press("SPACE");
+
+        assertThat(desk.selection().records())
+                .hasSize(2)
+                .doesNotContain(desk.selection().inHand().orElseThrow());
+        press("ctrl A");
+        assertThat(desk.selection().records()).hasSize(36);
+        desk.listPane().clearMarks();
+        assertThat(desk.selection().records())
+                .containsExactly(desk.selection().inHand().orElseThrow());
+    }
+
+    @Test
+    void theNextFilterWordIsReachedByAKey() {
+        desk.open(lab.archive());
+        desk.openStop(6);
+        press("F4");
+
+        assertThat(desk.listPane().content().question().orElseThrow().value())
+                .contains(new Question.Value("placement:purpose", "signal"));
+        press("shift F4");
+        assertThat(desk.listPane().content().question().orElseThrow().whole()).isTrue();
+    }
+
+    private void press(String key) {
+        desk.listPane()
+                .table()
+                .getActionMap()
+                .get("list " + key)
+                .actionPerformed(new ActionEvent(desk, ActionEvent.ACTION_PERFORMED, key));
+    }
+
+    @Test
+    void howMuchARecordMovesIsSaidBehindItsState() {
+        desk.open(lab.archive());
+        desk.recordPane().size(lab.figure, "V stays, 0.04 \u03c3");
+        DeskPictures.paint(desk, 1280, 770);
+
+        assertThat(desk.recordPane().getComponent(0).getAccessibleContext().getAccessibleDescription())
+                .endsWith("V stays, 0.04 \u03c3");
     }
 
     @Test
