@@ -41,7 +41,9 @@ final class ComputeCommand {
             footer = {
                 "",
                 "Inputs are a JSON object: {\"mass\": \"720.642 u\", \"velocity\": {\"value\": 200, \"u\": 0.5, \"unit\": \"m/s\"}}.",
-                "Units are UCUM codes; u is one standard uncertainty. Constants are CODATA 2018."
+                "Units are UCUM codes; u is one standard uncertainty. Constants are CODATA 2018.",
+                "Stated uncertainties are carried to every result to first order, inputs taken as independent",
+                "(JCGM 100, 5.1.3 note 2); what each input contributes stands below the results."
             })
     int compute(
             @Option(names = "--json", description = "Write JSON.") boolean json,
@@ -132,7 +134,8 @@ final class ComputeCommand {
             console.json(JsonObject.EMPTY
                     .with("method", method.name())
                     .with("constants", "CODATA 2018")
-                    .with("results", results.json()));
+                    .with("results", results.json())
+                    .with("budget", results.budget()));
             return;
         }
         List<List<String>> rows = new ArrayList<>();
@@ -141,6 +144,24 @@ final class ComputeCommand {
             rows.add(List.of(result.name(), shown(result.value()), uncertainty, result.unit()));
         }
         console.table(List.of("result", "value", "standard uncertainty", "unit"), rows);
+        budget(results);
+    }
+
+    private void budget(Results results) {
+        List<List<String>> rows = new ArrayList<>();
+        for (Json line : results.budget().items()) {
+            if (line instanceof JsonObject object) {
+                rows.add(List.of(
+                        object.text("result").orElse(""),
+                        object.text("input").orElse(""),
+                        object.get("u").map(ComputeCommand::shown).orElse(""),
+                        object.text("unit").orElse("")));
+            }
+        }
+        if (!rows.isEmpty()) {
+            console.line("");
+            console.table(List.of("result", "input", "contributes", "unit"), rows);
+        }
     }
 
     private static String shown(Json value) {

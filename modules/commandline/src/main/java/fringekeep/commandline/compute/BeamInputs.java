@@ -8,8 +8,10 @@ import java.util.List;
 
 /** Speeds, masses and heights a model averages over, as documents give them. */
 final class BeamInputs {
-    private static final int SHIFTED_PANELS = 400;
-    private static final int HEIGHT_POINTS = 12;
+    private static final int SHIFTED_PANELS = 800;
+    private static final int NORMAL_PANELS = 60;
+    private static final int HEIGHT_POINTS = 24;
+    private static final double REACH = 7;
     private static final double LOWEST = 1.0;
 
     /** Inputs of the beam. */
@@ -67,6 +69,21 @@ final class BeamInputs {
         if (in.word("velocityLaw", "normal").equals("shifted-flux")) {
             return WeightedNodes.shiftedFlux(velocity, spread, lowest, SHIFTED_PANELS);
         }
-        return spread > 0 ? WeightedNodes.normal(velocity, spread, lowest) : WeightedNodes.single(velocity);
+        return spread > 0 ? normal(velocity, spread, lowest) : WeightedNodes.single(velocity);
+    }
+
+    /** Cut exactly at the lowest velocity, below which phases in 1/v have no limit. */
+    private static WeightedNodes normal(double velocity, double spread, double lowest) {
+        double from = Math.max(lowest, velocity - REACH * spread);
+        double to = velocity + REACH * spread;
+        if (!(from < to)) {
+            throw new IllegalArgumentException("no velocity of " + velocity + " m/s +- " + spread
+                    + " m/s lies above the lowest, " + lowest + " m/s");
+        }
+        return WeightedNodes.ofDensity(
+                v -> StrictMath.exp(-0.5 * (v - velocity) * (v - velocity) / (spread * spread)),
+                from,
+                to,
+                NORMAL_PANELS);
     }
 }

@@ -122,10 +122,10 @@ final class BeamMethods {
         double mass = in.number("mass");
         double velocity = in.number("velocity");
         double wavelength = MatterWave.wavelength(mass, velocity);
-        out.estimate("wavelength", "m", Relative.power(wavelength, -1, in.estimate("velocity")));
+        out.value("wavelength", "m", wavelength);
         if (in.has("period")) {
             double length = MatterWave.talbotLength(mass, velocity, in.number("period"));
-            out.estimate("talbotLength", "m", Relative.power(length, 1, in.estimate("velocity")));
+            out.value("talbotLength", "m", length);
             out.value("talbotTime", "s", MatterWave.talbotTime(mass, in.number("period")));
         }
     }

@@ -6,7 +6,6 @@ import fringekeep.interferometry.molecule.Macroscopicity;
 import fringekeep.interferometry.molecule.ModificationBounds;
 import fringekeep.interferometry.molecule.Parameter;
 import fringekeep.interferometry.molecule.PhotoDepletion;
-import fringekeep.interferometry.molecule.PowerLawBudget;
 import fringekeep.interferometry.molecule.PropertyFit;
 import fringekeep.interferometry.molecule.RecoilBeam;
 import fringekeep.interferometry.nearfield.BeamEnsemble;
@@ -182,7 +181,11 @@ final class CrossSectionMethods {
         double temperature = in.number("temperature");
         double path = in.number("pathLength");
         if (in.has("decayPressure")) {
-            crossSection(in.estimate("decayPressure"), in, out);
+            Estimate exact = new Estimate(in.number("decayPressure"), 0);
+            out.value(
+                    "crossSection",
+                    "m2",
+                    GasCollisions.crossSection(exact, temperature, path).value());
         }
         if (in.has("c6") || in.has("c6AtomicUnits")) {
             double coefficient = in.has("c6AtomicUnits")
@@ -196,20 +199,13 @@ final class CrossSectionMethods {
         }
     }
 
-    private static void crossSection(Estimate decayPressure, Inputs in, Results out) {
-        Estimate measured =
-                GasCollisions.crossSection(decayPressure, in.number("temperature"), in.number("pathLength"));
-        PowerLawBudget budget = PowerLawBudget.of(
-                measured,
-                List.of(DeflectionMethods.input(in, "temperature", 1), DeflectionMethods.input(in, "pathLength", -1)));
-        out.estimate("crossSection", "m2", measured.value(), budget.combined());
-        out.value("statisticalUncertainty", "m2", budget.statistical());
-        out.value("sharedUncertainty", "m2", budget.shared());
-    }
-
     private static void pressure(Inputs in, Results out) throws ProblemException {
         PropertyFit fit = Fits.report(GasCollisions.fit(in.curve("pressures", "visibilities")), out);
-        crossSection(fit.estimate(Parameter.DECAY_PRESSURE), in, out);
+        out.estimate(
+                "crossSection",
+                "m2",
+                GasCollisions.crossSection(
+                        fit.estimate(Parameter.DECAY_PRESSURE), in.number("temperature"), in.number("pathLength")));
     }
 
     private static void depletion(Inputs in, Results out) throws ProblemException {

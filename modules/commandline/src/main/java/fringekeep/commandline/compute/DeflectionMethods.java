@@ -1,9 +1,13 @@
 package fringekeep.commandline.compute;
 
+import fringekeep.archive.json.Json;
+import fringekeep.archive.json.JsonObject;
 import fringekeep.archive.problem.ProblemException;
 import fringekeep.interferometry.molecule.DeflectionFit;
 import fringekeep.interferometry.molecule.FieldDeflection;
+import fringekeep.interferometry.molecule.MeasuredCurve;
 import fringekeep.interferometry.molecule.MomentFit;
+import fringekeep.interferometry.molecule.Parameter;
 import fringekeep.interferometry.molecule.Polarizability;
 import fringekeep.interferometry.molecule.PowerLawBudget;
 import fringekeep.interferometry.molecule.ReferenceRatio;
@@ -24,6 +28,13 @@ final class DeflectionMethods {
     private static final Field TEMPERATURE = Field.quantity("temperature", "K", "900 K", "temperature");
 
     private DeflectionMethods() {}
+
+    private static JsonObject power(String name, double exponent, double relative) {
+        return JsonObject.EMPTY
+                .with("name", name)
+                .with("exponent", Json.of(exponent))
+                .with("relative", Json.of(relative));
+    }
 
     static List<Method> all() {
         return List.of(
@@ -96,6 +107,45 @@ final class DeflectionMethods {
                         Field.quantity("searchFrom", "m3", "0 Ao3", "lower end of the search, as a volume"),
                         Field.quantity("searchTo", "m3", "400 Ao3", "upper end of the search, as a volume")),
                 Method.of(
+                        "magnetic-deflection-fit",
+                        "Magnetic susceptibility from wrapped phases against squared current, with unwrapping",
+                        DeflectionMethods::magneticFit,
+                        Field.list("currents", "A", "A", "currents of the magnet", 0, 2, 4, 6, 8, 10),
+                        Field.measured(
+                                "phases",
+                                "rad",
+                                "rad",
+                                "wrapped phases with u",
+                                new double[] {0.10, 0.22, 0.59, 1.19, 2.05, -3.13},
+                                new double[] {0.05}),
+                        Field.quantity(
+                                "fieldTermPerSquaredCurrent",
+                                "T2.m-1.A-2",
+                                "0.4 T2.m-1.A-2",
+                                "(B·∇)B over the squared current"),
+                        MASS,
+                        VELOCITY,
+                        SEPARATION,
+                        START,
+                        LENGTH,
+                        PERIOD,
+                        Field.quantity("searchFrom", "J/T2", "-1e-24 J/T2", "lower end of the search"),
+                        Field.quantity("searchTo", "J/T2", "1e-24 J/T2", "upper end of the search")),
+                Method.of(
+                        "power-law-budget",
+                        "Uncertainty of a product of powers: statistical and shared parts apart",
+                        DeflectionMethods::budget,
+                        Field.quantity("result", "1", "95.0(12)", "the result with its statistical uncertainty"),
+                        Field.group(
+                                "inputs",
+                                "inputs common to all data",
+                                List.of(
+                                        Field.text("name", "velocity", "what it is"),
+                                        Field.number("exponent", 2, "power with which it enters"),
+                                        Field.number("relative", 0.01, "relative standard uncertainty")),
+                                power("velocity", 2, 0.01),
+                                power("field term", -1, 0.02))),
+                Method.of(
                         "moment-fit",
                         "Polarizability and permanent moment from the susceptibility against temperature",
                         (in, out) -> Fits.report(MomentFit.fit(in.curve("temperatures", "susceptibilities")), out),
@@ -162,23 +212,25 @@ final class DeflectionMethods {
         String term = in.has("fieldTerm") ? "fieldTerm" : "magneticFieldTerm";
         double chi =
                 field(in).susceptibility(in.number("shift"), in.number(term), in.number("mass"), in.number("velocity"));
-        double statistical =
-                Math.abs(chi / in.number("shift")) * in.estimate("shift").standardUncertainty();
-        List<PowerLawBudget.Input> inputs = new ArrayList<>();
-        inputs.add(input(in, term, -1));
-        inputs.add(input(in, "mass", 1));
-        inputs.add(input(in, "velocity", 2));
-        PowerLawBudget budget = PowerLawBudget.of(new Estimate(chi, statistical), inputs);
-        String unit = term.equals("fieldTerm") ? "C.m2/V" : "J/T2";
-        out.estimate("susceptibility", unit, chi, budget.combined());
-        out.value("statisticalUncertainty", unit, budget.statistical());
-        out.value("sharedUncertainty", unit, budget.shared());
+        out.value("susceptibility", term.equals("fieldTerm") ? "C.m2/V" : "J/T2", chi);
     }
 
-    static PowerLawBudget.Input input(Inputs in, String name, double exponent) {
-        Estimate estimate = in.estimate(name);
-        double relative = Math.abs(estimate.standardUncertainty() / estimate.value());
-        return new PowerLawBudget.Input(name, exponent, relative);
+    private static void budget(Inputs in, Results out) {
+        List<PowerLawBudget.Input> inputs = new ArrayList<>();
+        for (Inputs one : in.groups("inputs")) {
+            inputs.add(new PowerLawBudget.Input(one.word("name", ""), one.number("exponent"), one.number("relative")));
+        }
+        Estimate given = in.estimate("result");
+        PowerLawBudget budget = PowerLawBudget.of(given, inputs);
+        out.bare("statisticalUncertainty", "1", budget.statistical());
+        out.bare("sharedUncertainty", "1", budget.shared());
+        out.bare("combinedUncertainty", "1", budget.combined());
+        out.bare(
+                "contributions",
+                "1",
+                budget.parts().stream()
+                        .mapToDouble(PowerLawBudget.Part::contribution)
+                        .toArray());
     }
 
     private static void fit(Inputs in, Results out) throws ProblemException {
@@ -190,12 +242,35 @@ final class DeflectionMethods {
         double factor = field.phase(
                 field.shift(1.0, in.number("fieldTermPerSquaredVoltage"), in.number("mass"), in.number("velocity")));
         double unit = Polarizability.siFromVolume(1);
-        DeflectionFit.Result result = new DeflectionFit(
-                        factor, unit * in.number("searchFrom"), unit * in.number("searchTo"))
-                .fit(new fringekeep.interferometry.molecule.MeasuredCurve(
-                        squares, in.numbers("phases"), in.stated("phases")));
+        report(
+                new DeflectionFit(factor, unit * in.number("searchFrom"), unit * in.number("searchTo")),
+                squares,
+                in,
+                out);
+    }
+
+    private static void magneticFit(Inputs in, Results out) throws ProblemException {
+        double[] squares = in.numbers("currents");
+        for (int k = 0; k < squares.length; k++) {
+            squares[k] *= squares[k];
+        }
+        FieldDeflection field = field(in);
+        double factor = field.phase(
+                field.shift(1.0, in.number("fieldTermPerSquaredCurrent"), in.number("mass"), in.number("velocity")));
+        report(
+                new DeflectionFit(
+                        factor, in.number("searchFrom"), in.number("searchTo"), Parameter.MAGNETIC_SUSCEPTIBILITY),
+                squares,
+                in,
+                out);
+    }
+
+    private static void report(DeflectionFit question, double[] squares, Inputs in, Results out)
+            throws ProblemException {
+        DeflectionFit.Result result =
+                question.fit(new MeasuredCurve(squares, in.numbers("phases"), in.stated("phases")));
         Fits.report(result.outcome(), out);
-        out.values("unwrappedPhases", "rad", result.unwrapped());
+        out.bare("unwrappedPhases", "rad", result.unwrapped());
     }
 
     private static void ratio(Inputs in, Results out) {

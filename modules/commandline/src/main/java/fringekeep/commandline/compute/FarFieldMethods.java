@@ -11,6 +11,7 @@ import fringekeep.interferometry.farfield.SlitArray;
 import fringekeep.interferometry.nearfield.EikonalSlitKernel;
 import fringekeep.interferometry.nearfield.WallPotential;
 import fringekeep.interferometry.nearfield.WeightedNodes;
+import fringekeep.interferometry.special.Bessel;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
@@ -213,6 +214,12 @@ final class FarFieldMethods {
                     "populationsAtPhase" + (k + 1),
                     "1",
                     Arrays.copyOfRange(populations, basis - highest, basis + highest + 1));
+            double[] thin = new double[highest + 1];
+            for (int n = 0; n < thin.length; n++) {
+                double amplitude = Bessel.j(n, 0.5 * phase);
+                thin[n] = amplitude * amplitude;
+            }
+            out.values("thinLimitAtPhase" + (k + 1), "1", thin);
             reflections[k] = orders.twoLevelReflection(phase, duration);
         }
         out.values("twoLevelReflection", "1", reflections);
@@ -249,9 +256,9 @@ final class FarFieldMethods {
         out.estimates("populations", "1", List.of(result.populations()));
         out.values("amplitudes", "1", result.amplitudes());
         out.estimate("background", "1", result.background());
-        out.values("covariance", "1", result.covariance());
-        out.value("chiSquare", "1", result.chiSquare());
-        out.value("degreesOfFreedom", "1", result.degreesOfFreedom());
-        out.value("pValue", "1", result.pValue());
+        out.bare("covariance", "1", result.covariance());
+        out.bare("chiSquare", "1", result.chiSquare());
+        out.bare("degreesOfFreedom", "1", result.degreesOfFreedom());
+        out.bare("pValue", "1", result.pValue());
     }
 }

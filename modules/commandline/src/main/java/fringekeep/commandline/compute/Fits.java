@@ -24,12 +24,12 @@ final class Fits {
         for (Parameter parameter : fit.parameters()) {
             out.estimate(name(parameter), parameter.unit(), fit.estimate(parameter));
         }
-        out.values("covariance", "", fit.covariance());
+        out.bare("covariance", "", fit.covariance());
         out.list("covarianceOf", names(fit.parameters()));
-        out.value("chiSquare", "1", fit.chiSquare());
-        out.value("degreesOfFreedom", "1", fit.degreesOfFreedom());
-        out.value("pValue", "1", fit.pValue());
-        out.values("fitted", "", fit.fitted());
+        out.bare("chiSquare", "1", fit.chiSquare());
+        out.bare("degreesOfFreedom", "1", fit.degreesOfFreedom());
+        out.bare("pValue", "1", fit.pValue());
+        out.bare("fitted", "", fit.fitted());
         out.list("warnings", fit.warnings().stream().map(FitWarning::words).toList());
         return fit;
     }

@@ -128,13 +128,13 @@ final class FlightMethods {
         out.estimate("background", "1", fit.background());
         out.estimate("meanVelocity", "m/s", fit.meanVelocity());
         out.value("mostProbableVelocity", "m/s", fit.law().mode());
-        out.value("deviance", "1", fit.deviance());
-        out.value("degreesOfFreedom", "1", fit.degreesOfFreedom());
-        out.value("pValue", "1", fit.pValue());
-        out.value("wrapAround", "1", fit.wrapAround());
+        out.bare("deviance", "1", fit.deviance());
+        out.bare("degreesOfFreedom", "1", fit.degreesOfFreedom());
+        out.bare("pValue", "1", fit.pValue());
+        out.bare("wrapAround", "1", fit.wrapAround());
         out.value("meanPerFlightLength", "s-1", fit.lengthOverVelocity());
         out.value("meanPerTimeZero", "m/s2", fit.timeZeroSlope());
-        out.values("covariance", "", fit.covariance());
+        out.bare("covariance", "", fit.covariance());
     }
 
     private static PseudoRandomSequence sequence(Inputs in) {
@@ -164,9 +164,9 @@ final class FlightMethods {
         double[] deviations = new double[decoded.length];
         java.util.Arrays.fill(deviations, Math.sqrt(variance));
         out.estimates("signal", "1", decoded, deviations);
-        out.value("autocorrelationAtZero", "1", sequence.autocorrelation(0));
-        out.value("autocorrelationElsewhere", "1", sequence.autocorrelation(1));
-        out.value("wrapAround", "1", sequence.wrapAround(decoded, variance, in.whole("zeroBin", 0)));
+        out.bare("autocorrelationAtZero", "1", sequence.autocorrelation(0));
+        out.bare("autocorrelationElsewhere", "1", sequence.autocorrelation(1));
+        out.bare("wrapAround", "1", sequence.wrapAround(decoded, variance, in.whole("zeroBin", 0)));
         out.flag("looksReversed", PseudoRandomSequence.looksReversed(decoded));
         if (in.has("background")) {
             out.value("offsetOfBackground", "1", 2 * in.number("background") / (sequence.length() + 1.0));

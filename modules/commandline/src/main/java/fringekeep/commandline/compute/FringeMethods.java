@@ -49,7 +49,12 @@ final class FringeMethods {
                         "fringe-joint-fit",
                         "Several scans with a common visibility and phases of their own",
                         FringeMethods::joint,
-                        FringeInputs.choicesAnd(SCANS)),
+                        FringeInputs.choicesAnd(
+                                SCANS,
+                                Field.choice(
+                                        "nuisances",
+                                        JointFit.Nuisances.class,
+                                        "drift, background and the like: free if not given, or held at each scan's fit"))),
                 Method.of(
                         "fringe-sum",
                         "Several scans made into one, then fitted",
@@ -133,27 +138,27 @@ final class FringeMethods {
         for (String name : fit.names()) {
             fit.estimate(name).ifPresent(value -> out.estimate(name, name.equals("period") ? "m" : "1", value));
         }
-        out.values("covariance", "", fit.covariance());
+        out.bare("covariance", "", fit.covariance());
         out.list("covarianceOf", fit.names());
         goodness(fit, out);
         fit.significance().ifPresent(found -> {
-            out.value("significance", "1", found.deviations());
-            out.value("noFringePValue", "1", found.pValue());
-            out.value("visibilityOfNoise95", "1", found.threshold95());
+            out.bare("significance", "1", found.deviations());
+            out.bare("noFringePValue", "1", found.pValue());
+            out.bare("visibilityOfNoise95", "1", found.threshold95());
         });
         out.list("findings", fit.findings().stream().map(Field::word).toList());
     }
 
     private static void goodness(FringeFit fit, Results out) {
         FringeGoodness goodness = fit.goodness();
-        out.value("deviance", "1", fit.deviance());
-        out.value("chiSquare", "1", fit.chiSquare());
-        out.value("residualSumOfSquares", "1", fit.residualSumOfSquares());
-        out.value("degreesOfFreedom", "1", goodness.degreesOfFreedom());
-        out.value("pValue", "1", goodness.pValue());
+        out.bare("deviance", "1", fit.deviance());
+        out.bare("chiSquare", "1", fit.chiSquare());
+        out.bare("residualSumOfSquares", "1", fit.residualSumOfSquares());
+        out.bare("degreesOfFreedom", "1", goodness.degreesOfFreedom());
+        out.bare("pValue", "1", goodness.pValue());
         out.estimate("dispersion", "1", goodness.dispersion(), goodness.dispersionUncertainty());
-        out.value("runs", "1", goodness.runs().runs());
-        out.value("runsPValue", "1", goodness.runs().pValue());
+        out.bare("runs", "1", goodness.runs().runs());
+        out.bare("runsPValue", "1", goodness.runs().pValue());
     }
 
     private static void robust(Inputs in, Results out) throws ProblemException {
@@ -178,14 +183,15 @@ final class FringeMethods {
     }
 
     private static void joint(Inputs in, Results out) throws ProblemException {
-        JointOutcome outcome = JointFit.of(scans(in), FringeInputs.options(in));
+        JointOutcome outcome =
+                JointFit.of(scans(in), FringeInputs.options(in), in.choice("nuisances", JointFit.Nuisances.FREE));
         if (outcome instanceof FringeFailure failure) {
             throw NoResult.because(failure.words());
         }
         if (outcome instanceof JointFit fit) {
             out.estimate("visibility", "1", fit.visibility());
             out.interval("visibilityInterval", "1", fit.interval(in.number("level", 0.95)));
-            out.value("sameVisibilityPValue", "1", fit.sameVisibilityPValue());
+            out.bare("sameVisibilityPValue", "1", fit.sameVisibilityPValue());
             List<Estimate> phases = new ArrayList<>();
             fit.scans().forEach(scan -> scan.phase().ifPresent(phases::add));
             out.estimates("phases", "rad", phases);
@@ -239,15 +245,15 @@ final class FringeMethods {
         out.estimate("visibilityRatio", "1", fringe.visibilityRatio());
         out.estimate("phaseDifference", "rad", fringe.phaseDifference());
         out.estimate("meanRatio", "1", fringe.meanRatio());
-        out.value("referencesAgreePValue", "1", fringe.referencesAgree());
+        out.bare("referencesAgreePValue", "1", fringe.referencesAgree());
     }
 
     private static void period(Inputs in, Results out) throws ProblemException {
         PeriodSearch search = PeriodSearch.over(FringeInputs.data(in), in.number("shortest"), in.number("longest"))
                 .orElseThrow(() -> NoResult.because("Fewer than four points or no counts are left."));
         out.value("periodOfHighestPower", "m", search.period());
-        out.value("power", "1", search.power());
-        out.value("falseAlarmProbability", "1", search.falseAlarm());
+        out.bare("power", "1", search.power());
+        out.bare("falseAlarmProbability", "1", search.falseAlarm());
         out.estimate("period", "m", search.refined());
     }
 }

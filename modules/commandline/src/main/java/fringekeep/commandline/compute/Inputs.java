@@ -4,16 +4,25 @@ import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
 import fringekeep.interferometry.molecule.MeasuredCurve;
 import fringekeep.interferometry.statistics.Estimate;
+import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.HashSet;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.Set;
 
-/** Checked inputs of one computation: required ones are there, numbers are SI. Thread rule: immutable. */
+/**
+ * Checked inputs of one computation: required ones are there, numbers are SI. Remembers whose uncertainty a method used, so
+ * that it is not carried to the results a second time. Thread rule: one thread.
+ */
 public final class Inputs {
     private final Map<String, Given> given;
+    private final Set<String> judged = new HashSet<>();
+    private final boolean repeated;
 
     /** What stands in one input. */
     sealed interface Given {
@@ -34,7 +43,62 @@ public final class Inputs {
     }
 
     Inputs(Map<String, Given> given) {
-        this.given = Map.copyOf(given);
+        this(given, false);
+    }
+
+    private Inputs(Map<String, Given> given, boolean repeated) {
+        this.given = new LinkedHashMap<>(given);
+        this.repeated = repeated;
+    }
+
+    /** Takes the place of an uncertainty and its size. */
+    interface UncertaintyTaker {
+        void take(String path, double u);
+    }
+
+    /** Whether these are inputs moved by an uncertainty: only results it is carried to are wanted. */
+    boolean repeated() {
+        return repeated;
+    }
+
+    /** Every stated uncertainty above 0 that no method used, with a path such as first.openFraction or heights[2]. */
+    void eachUncertainty(String before, UncertaintyTaker taker) {
+        given.forEach((name, value) -> {
+            if (value instanceof Given.Numbers numbers && !judged.contains(name)) {
+                double[] u = numbers.uncertainties();
+                for (int k = 0; k < u.length; k++) {
+                    if (u[k] > 0) {
+                        taker.take(before + name + (u.length > 1 ? "[" + k + "]" : ""), u[k]);
+                    }
+                }
+            }
+            if (value instanceof Given.Groups groups) {
+                for (int k = 0; k < groups.members().size(); k++) {
+                    String place = groups.members().size() > 1 ? "[" + k + "]" : "";
+                    groups.members().get(k).eachUncertainty(before + name + place + ".", taker);
+                }
+            }
+        });
+    }
+
+    /** The same with the number at a path moved. */
+    Inputs moved(String path, double by) {
+        int dot = path.indexOf('.');
+        String head = dot < 0 ? path : path.substring(0, dot);
+        int bracket = head.indexOf('[');
+        String name = bracket < 0 ? head : head.substring(0, bracket);
+        int at = bracket < 0 ? 0 : Integer.parseInt(head.substring(bracket + 1, head.length() - 1));
+        Map<String, Given> copy = new LinkedHashMap<>(given);
+        if (given.get(name) instanceof Given.Numbers numbers) {
+            double[] values = numbers.values().clone();
+            values[at] += by;
+            copy.put(name, new Given.Numbers(values, numbers.uncertainties()));
+        } else if (given.get(name) instanceof Given.Groups groups) {
+            List<Inputs> members = new ArrayList<>(groups.members());
+            members.set(at, members.get(at).moved(path.substring(dot + 1), by));
+            copy.put(name, new Given.Groups(members));
+        }
+        return new Inputs(copy, true);
     }
 
     boolean has(String name) {
@@ -77,6 +141,7 @@ public final class Inputs {
 
     /** Standard uncertainties, NaN where none is stated. */
     double[] uncertainties(String name) {
+        judged.add(name);
         return given(name) instanceof Given.Numbers numbers
                 ? numbers.uncertainties().clone()
                 : new double[0];

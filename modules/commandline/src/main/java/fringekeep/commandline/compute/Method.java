@@ -38,7 +38,7 @@ public record Method(String name, String words, List<Field> fields, Body body) {
     }
 
     /**
-     * Reads the inputs and computes.
+     * Reads the inputs, computes, and carries the uncertainties of the inputs to the results.
      *
      * @param document inputs by name
      * @return the results in the order the method gives them
@@ -49,6 +49,7 @@ public record Method(String name, String words, List<Field> fields, Body body) {
         Results results = new Results();
         try {
             body.compute(inputs, results);
+            new Propagation(this, inputs).carry(results);
         } catch (IllegalArgumentException e) {
             throw new ProblemException(new Problem(
                     "compute.refused",

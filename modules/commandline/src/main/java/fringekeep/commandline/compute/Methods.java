@@ -15,7 +15,8 @@ public final class Methods {
                     "molecular properties",
                     Stream.of(PowerCurveMethods.all(), DeflectionMethods.all(), CrossSectionMethods.all())),
             new Group("far field", Stream.of(FarFieldMethods.all())),
-            new Group("particle traces", Stream.of(TraceMethods.all())));
+            new Group("particle traces", Stream.of(TraceMethods.all())),
+            new Group("statistics", Stream.of(StatisticsMethods.all())));
 
     private Methods() {}
 

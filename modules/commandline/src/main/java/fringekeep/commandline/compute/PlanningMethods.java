@@ -124,7 +124,7 @@ final class PlanningMethods {
             needed("ForPhase", FringePlanning.countsForPhase(wanted, visibility, ratio), in, out);
         }
         if (in.has("highestHarmonic")) {
-            out.value("fewestPoints", "1", FringePlanning.fewestPoints(in.whole("highestHarmonic")));
+            out.bare("fewestPoints", "1", FringePlanning.fewestPoints(in.whole("highestHarmonic")));
         }
     }
 

@@ -111,6 +111,9 @@ final class PowerCurveMethods {
         Estimate volume = fit.estimate(Parameter.POLARIZABILITY_VOLUME);
         double perVolume = Polarizability.siFromVolume(1);
         out.estimate("polarizability", "C.m2/V", perVolume * volume.value(), perVolume * volume.standardUncertainty());
+        if (in.repeated()) {
+            return;
+        }
         PowerCurveIntervals intervals = new PowerCurveIntervals(fitter, data, description, fit);
         for (Parameter parameter : fit.parameters()) {
             out.interval(
@@ -128,13 +131,13 @@ final class PowerCurveMethods {
 
     private static void bootstrap(PowerCurveIntervals.Bootstrap spread, Results out) {
         out.words("bootstrapGenerator", spread.generator());
-        out.value("bootstrapSeed", "1", spread.seed());
-        out.value("bootstrapResamples", "1", spread.resamples());
-        out.value("bootstrapFailed", "1", spread.failed());
-        out.estimates("bootstrapMean", "", spread.mean(), spread.deviation());
+        out.bare("bootstrapSeed", "1", spread.seed());
+        out.bare("bootstrapResamples", "1", spread.resamples());
+        out.bare("bootstrapFailed", "1", spread.failed());
+        out.bareEstimates("bootstrapMean", "", spread.mean(), spread.deviation());
         for (int k = 0; k < spread.central68().length; k++) {
-            out.values("bootstrapCentral68Of" + (k + 1), "", spread.central68()[k]);
-            out.values("bootstrapCentral95Of" + (k + 1), "", spread.central95()[k]);
+            out.bare("bootstrapCentral68Of" + (k + 1), "", spread.central68()[k]);
+            out.bare("bootstrapCentral95Of" + (k + 1), "", spread.central95()[k]);
         }
     }
 
@@ -143,8 +146,8 @@ final class PowerCurveMethods {
                 .map(one -> new SharedInputs.Uncertain(one.choice("input", SharedInput.POWER), one.number("relative")))
                 .toList();
         SharedInputs.Budget budget = shared.budget(Parameter.POLARIZABILITY_VOLUME, uncertain);
-        out.value("statisticalUncertainty", "m3", budget.statistical());
-        out.value("sharedUncertainty", "m3", budget.shared());
+        out.bare("statisticalUncertainty", "m3", budget.statistical());
+        out.bare("sharedUncertainty", "m3", budget.shared());
         out.estimate("polarizabilityVolumeCombined", "m3", budget.value(), budget.combined());
         out.list(
                 "sharedInputs",
@@ -166,13 +169,13 @@ final class PowerCurveMethods {
         PropertyFit classical = Fits.found(both.classical());
         out.words("verdict", Field.word(both.verdict()));
         out.words("reason", both.reason());
-        out.value("logLikelihoodRatio", "1", both.logLikelihoodRatio());
-        out.value("expectedIfQuantum", "1", both.expectedIfQuantum());
-        out.value("expectedIfClassical", "1", both.expectedIfClassical());
+        out.bare("logLikelihoodRatio", "1", both.logLikelihoodRatio());
+        out.bare("expectedIfQuantum", "1", both.expectedIfQuantum());
+        out.bare("expectedIfClassical", "1", both.expectedIfClassical());
         out.estimate("quantumPolarizabilityVolume", "m3", quantum.estimate(volume));
-        out.value("quantumChiSquare", "1", quantum.chiSquare());
+        out.bare("quantumChiSquare", "1", quantum.chiSquare());
         out.estimate("classicalPolarizabilityVolume", "m3", classical.estimate(volume));
-        out.value("classicalChiSquare", "1", classical.chiSquare());
+        out.bare("classicalChiSquare", "1", classical.chiSquare());
     }
 
     private static void units(Inputs in, Results out) {

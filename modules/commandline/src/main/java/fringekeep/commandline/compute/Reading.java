@@ -100,6 +100,9 @@ final class Reading {
             if (field.sort() == Field.Sort.WHOLE && (only != Math.rint(only) || Math.abs(only) > 1e9)) {
                 return refused("whole", field.name() + " is a whole number.", place, "Write a whole number.");
             }
+            if (field.sort() == Field.Sort.WHOLE && numbers.uncertainties()[0] > 0) {
+                return refused("whole", field.name() + " is counted and has no uncertainty.", place, "Leave u away.");
+            }
             return Optional.of(numbers);
         } catch (ProblemException e) {
             e.problems().forEach(problem -> problems.add(problem.at(at(place))));

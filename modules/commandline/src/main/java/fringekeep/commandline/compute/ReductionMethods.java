@@ -43,6 +43,18 @@ final class ReductionMethods {
                         Field.quantity("beamWidth", "m", "1 mm", "uniform").orNothing(),
                         PERIOD),
                 Method.of(
+                        "time-mismatch-reduction",
+                        "Visibility left by unequal flight times between the gratings and transverse velocities",
+                        (in, out) -> out.value(
+                                "factor",
+                                "1",
+                                VisibilityReduction.timeMismatch(
+                                        in.number("transverseSpread"), in.number("mismatch"), in.number("period"))),
+                        Field.quantity(
+                                "transverseSpread", "m/s", "0.5 m/s", "standard deviation of transverse velocities"),
+                        Field.quantity("mismatch", "s", "30 ns", "second less first flight time"),
+                        PERIOD.shownAs(Json.of("78.8 nm"))),
+                Method.of(
                         "inertial-phases",
                         "Fringe phases by acceleration and rotation",
                         ReductionMethods::inertial,

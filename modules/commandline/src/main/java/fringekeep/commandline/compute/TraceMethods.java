@@ -101,8 +101,8 @@ final class TraceMethods {
             frequencies[k] = spectrum.frequency(k);
             densities[k] = spectrum.density(k);
         }
-        out.value("segments", "1", spectrum.segments());
-        out.value("effectiveAverages", "1", spectrum.effectiveAverages());
+        out.bare("segments", "1", spectrum.segments());
+        out.bare("effectiveAverages", "1", spectrum.effectiveAverages());
         out.values("frequencies", "s-1", frequencies);
         out.values("densities", "s", densities);
     }
@@ -114,7 +114,7 @@ final class TraceMethods {
         out.estimate("damping", "rad/s", fit.damping());
         out.estimate("meanSquare", "1", fit.meanSquare());
         out.estimate("floor", "s", fit.floor());
-        out.values("covariance", "", fit.covariance());
+        out.bare("covariance", "", fit.covariance());
         if (in.has("mass") && in.has("calibration")) {
             out.estimate("temperature", "K", fit.temperature(in.number("mass"), in.number("calibration")));
         }
@@ -129,10 +129,10 @@ final class TraceMethods {
         out.estimate("rate", "s-1", fit.rate());
         out.estimate("start", "1", fit.start());
         out.estimate("end", "1", fit.end());
-        out.values("covariance", "", fit.covariance());
-        out.value("chiSquare", "1", fit.chiSquare());
-        out.value("degreesOfFreedom", "1", fit.degreesOfFreedom());
-        out.value("pValue", "1", fit.pValue());
+        out.bare("covariance", "", fit.covariance());
+        out.bare("chiSquare", "1", fit.chiSquare());
+        out.bare("degreesOfFreedom", "1", fit.degreesOfFreedom());
+        out.bare("pValue", "1", fit.pValue());
     }
 
     private static void damping(Inputs in, Results out) {
