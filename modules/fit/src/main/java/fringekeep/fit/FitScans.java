@@ -156,7 +156,8 @@ public final class FitScans {
         return outcomes;
     }
 
-    private NewRecord request(Request request, Optional<PersonId> person) throws ProblemException {
+    /** The request as a record to be: its inputs gathered, nothing computed. */
+    NewRecord request(Request request, Optional<PersonId> person) throws ProblemException {
         GatherInputs.Asked asked = new GatherInputs.Asked(
                 request.scans(),
                 request.references(),
@@ -176,8 +177,8 @@ public final class FitScans {
                 person);
     }
 
-    /** The one current fit that answers the same question; empty if there is none. */
-    private Optional<Hash> replaced(List<InputReference> inputs) throws ProblemException {
+    /** Current fits that answer the question these inputs ask. */
+    List<Hash> rivals(List<InputReference> inputs) {
         String question = question(inputs);
         Graph graph = archive.graph();
         List<Hash> rivals = new ArrayList<>();
@@ -189,6 +190,12 @@ public final class FitScans {
                 }
             }
         }
+        return rivals;
+    }
+
+    /** The one current fit that answers the same question; empty if there is none. */
+    private Optional<Hash> replaced(List<InputReference> inputs) throws ProblemException {
+        List<Hash> rivals = rivals(inputs);
         if (rivals.size() > 1) {
             List<String> labels = rivals.stream().map(archive::label).toList();
             throw new ProblemException(

@@ -9,7 +9,9 @@ import fringekeep.archive.kind.RecordView;
 import fringekeep.archive.record.AboutReference;
 import fringekeep.archive.record.Hash;
 import java.util.List;
+import java.util.NavigableSet;
 import java.util.Optional;
+import java.util.TreeSet;
 
 /** Rows that pinned judgements mask. */
 public final class Masks {
@@ -43,6 +45,24 @@ public final class Masks {
                 .filter(reference -> reference.role().equals("target"))
                 .map(AboutReference::record)
                 .anyMatch(scan::equals);
+    }
+
+    /**
+     * Rows that a judgement masks.
+     *
+     * @param content its content
+     * @param rows how many rows the scan has
+     */
+    public static NavigableSet<Integer> rows(JsonObject content, int rows) {
+        boolean[] masked = new boolean[rows];
+        mark(content, masked);
+        NavigableSet<Integer> found = new TreeSet<>();
+        for (int row = 0; row < rows; row++) {
+            if (masked[row]) {
+                found.add(row);
+            }
+        }
+        return found;
     }
 
     private static void mark(JsonObject content, boolean[] masked) {
