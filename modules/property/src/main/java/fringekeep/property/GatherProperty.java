@@ -48,12 +48,27 @@ public final class GatherProperty {
     public NewRecord request(Hash selection, JsonObject choices, List<Hash> quoted, Optional<PersonId> person)
             throws ProblemException {
         Hash current = standing(selection, "selection");
+        return request(current, pinned(view(current), SelectionKind.TAKEN), choices, quoted, person);
+    }
+
+    /**
+     * The request for a property of a selection that is about to be recorded before it.
+     *
+     * @param selection its fingerprint
+     * @param fits the fits it takes
+     * @param choices choices, possibly incomplete
+     * @param quoted quoted values to stand beside
+     * @throws ProblemException if the fits are of several compounds
+     */
+    public NewRecord request(
+            Hash selection, List<Hash> fits, JsonObject choices, List<Hash> quoted, Optional<PersonId> person)
+            throws ProblemException {
         List<InputReference> inputs = new ArrayList<>();
-        inputs.add(new InputReference.OfRecord("selection", current));
+        inputs.add(new InputReference.OfRecord("selection", selection));
         Set<Hash> velocities = new LinkedHashSet<>();
         Set<Hash> compounds = new LinkedHashSet<>();
         Set<Hash> calibrations = new LinkedHashSet<>();
-        for (Hash fit : pinned(view(current), SelectionKind.TAKEN)) {
+        for (Hash fit : fits) {
             RecordView view = view(fit);
             pinned(view, "placement").forEach(placement -> velocitiesOf(view(placement), velocities));
             for (Hash compound : pinned(view, "compound")) {
