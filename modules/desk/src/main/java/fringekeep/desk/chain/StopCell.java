@@ -11,6 +11,8 @@ import fringekeep.desk.look.Type;
 import fringekeep.drawing.NumberText;
 import java.awt.Font;
 import java.awt.Graphics;
+import java.awt.event.FocusAdapter;
+import java.awt.event.FocusEvent;
 import java.awt.event.MouseAdapter;
 import java.awt.event.MouseEvent;
 import javax.accessibility.AccessibleRole;
@@ -33,6 +35,18 @@ final class StopCell extends Painted {
         this.position = position;
         this.state = state;
         setFocusable(true);
+        setName("stop " + state.label());
+        addFocusListener(new FocusAdapter() {
+            @Override
+            public void focusGained(FocusEvent event) {
+                repaint();
+            }
+
+            @Override
+            public void focusLost(FocusEvent event) {
+                repaint();
+            }
+        });
         addMouseListener(new MouseAdapter() {
             @Override
             public void mousePressed(MouseEvent event) {

@@ -40,7 +40,11 @@ final class ListColumns {
             free = !plotted && given == 0 ? 0 : free - (plotted ? 0 : given);
             set(columns.getColumn(i), given);
         }
-        int last = marks ? MARK + Math.max(0, free) : Math.max(0, free);
+        int taken = 0;
+        for (int i = 0; i < count - 1; i++) {
+            taken += columns.getColumn(i).getWidth();
+        }
+        int last = Math.max(0, width - taken);
         set(columns.getColumn(count - 1), last);
     }
 

@@ -286,6 +286,9 @@ public final class Desk extends JPanel {
         }
         ask(place.question());
         place.inHand().ifPresent(this::read);
+        if (first && card.equals("records")) {
+            list.focusRows();
+        }
         sheet.ifPresent(DeskSheet::recorded);
         if (first) {
             stages.all().forEach(stage -> stage.opened(hand));
@@ -398,6 +401,7 @@ public final class Desk extends JPanel {
 
     private List<String> columns(String kind) {
         return memory.get("columns " + kind)
+                .filter(text -> !text.isBlank())
                 .map(text -> List.of(text.split(",")))
                 .orElse(List.of());
     }

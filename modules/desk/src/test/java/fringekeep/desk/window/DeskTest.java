@@ -26,12 +26,9 @@ import org.junit.jupiter.api.Test;
 class DeskTest {
     private final InventedLab lab = new InventedLab();
     private final List<Problem> troubles = new ArrayList<>();
+    private final Memory memory = Memory.fleeting();
     private final Desk desk = new Desk(
-            new Runner(Runnable::run, Runnable::run),
-            Stops.shipped(),
-            new Host(),
-            Memory.fleeting(),
-            new DeskStages(List.of()));
+            new Runner(Runnable::run, Runnable::run), Stops.shipped(), new Host(), memory, new DeskStages(List.of()));
 
     private final class Host implements DeskHost {
         @Override
@@ -174,6 +171,21 @@ class DeskTest {
                 .contains(new Question.Value("placement:purpose", "signal"));
         press("shift F4");
         assertThat(desk.listPane().content().question().orElseThrow().whole()).isTrue();
+    }
+
+    @Test
+    void chosenColumnsAreKeptAndTheUsualOnesComeBack() {
+        desk.open(lab.archive());
+        desk.openStop(6);
+        memory.put("columns scan", "fit:visibility,ended");
+        desk.openStop(6);
+        assertThat(desk.listPane().content().heads())
+                .extracting(head -> head.column())
+                .containsExactly("fit:visibility", "ended");
+
+        memory.put("columns scan", "");
+        desk.openStop(6);
+        assertThat(desk.listPane().content().heads()).hasSizeGreaterThan(2);
     }
 
     private void press(String key) {
