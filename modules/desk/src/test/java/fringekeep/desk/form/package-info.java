@@ -1,0 +1,3 @@
+/** Tests of forms. */
+@org.jspecify.annotations.NullMarked
+package fringekeep.desk.form;
