@@ -22,21 +22,24 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.SortedMap;
 import java.util.TreeMap;
+import java.util.function.Consumer;
 
 /** Checks a bundle without any archive, level by level; a level is only asked when the one before holds. */
 public final class CheckBundle {
     private final Path bag;
     private final Kinds kinds;
     private final Work work;
+    private final Consumer<LevelChecked> told;
     private final SortedMap<Level, List<Problem>> faults = new TreeMap<>();
     private final SortedMap<String, Integer> recomputed = new TreeMap<>();
     private final List<String> notes = new ArrayList<>();
     private int records;
 
-    private CheckBundle(Path bag, Kinds kinds, Work work) {
+    private CheckBundle(Path bag, Kinds kinds, Work work, Consumer<LevelChecked> told) {
         this.bag = bag;
         this.kinds = kinds;
         this.work = work;
+        this.told = told;
     }
 
     /**
@@ -48,16 +51,39 @@ public final class CheckBundle {
      */
     public static BundleReport check(Path bundle, Kinds kinds, Level most, Work work)
             throws ProblemException, StoppedException {
+        return check(bundle, kinds, most, work, level -> {});
+    }
+
+    /**
+     * A level that was asked.
+     *
+     * @param level the level
+     * @param faults what is wrong; empty when it holds
+     */
+    public record LevelChecked(Level level, List<Problem> faults) {
+        /** Copies. */
+        public LevelChecked {
+            faults = List.copyOf(faults);
+        }
+    }
+
+    /**
+     * The same, telling of each level as soon as it was asked.
+     *
+     * @param told hears of each level, on the calling thread
+     */
+    public static BundleReport check(Path bundle, Kinds kinds, Level most, Work work, Consumer<LevelChecked> told)
+            throws ProblemException, StoppedException {
         try {
             if (Files.isDirectory(bundle)) {
-                return new CheckBundle(bundle, kinds, work).run(most);
+                return new CheckBundle(bundle, kinds, work, told).run(most);
             }
             if (!Files.isRegularFile(bundle)) {
                 throw problem("bundle.not-there", "There is no such folder or file.", bundle);
             }
             Path aside = Files.createTempDirectory("fringekeep-check-");
             try {
-                return new CheckBundle(Zip.unpack(bundle, aside, work), kinds, work).run(most);
+                return new CheckBundle(Zip.unpack(bundle, aside, work), kinds, work, told).run(most);
             } finally {
                 Layout.remove(aside);
             }
@@ -78,6 +104,7 @@ public final class CheckBundle {
                 break;
             }
             List<Problem> found = level(level);
+            told.accept(new LevelChecked(level, found));
             if (!found.isEmpty()) {
                 faults.put(level, found);
                 break;

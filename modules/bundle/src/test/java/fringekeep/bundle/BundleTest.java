@@ -60,6 +60,70 @@ class BundleTest {
     }
 
     @Test
+    void whatGoesInIsCountedByKind() {
+        assertThat(ExportBundle.shares(small.archive(), List.of(root)).values().stream()
+                        .mapToInt(ExportBundle.KindShare::records)
+                        .sum())
+                .isEqualTo(ExportBundle.preview(small.archive(), List.of(root)).records());
+        assertThat(ExportBundle.shares(small.archive(), List.of(root)).values().stream()
+                        .mapToLong(ExportBundle.KindShare::rawBytes)
+                        .sum())
+                .isEqualTo(ExportBundle.preview(small.archive(), List.of(root)).rawBytes());
+    }
+
+    @Test
+    void aCheckedExportTellsOfEveryLevelAndAStoppedOneLeavesNothing() throws Exception {
+        List<Level> told = new java.util.ArrayList<>();
+        ExportBundle.CheckedExport checked = ExportBundle.exportChecked(
+                small.archive(),
+                List.of(root),
+                ExportedOnce.settings("checked"),
+                folder,
+                true,
+                Work.QUIET,
+                level -> told.add(level.level()));
+
+        assertThat(checked.exported().place()).isRegularFile();
+        assertThat(checked.report().level()).isEqualTo(Level.RECOMPUTED);
+        assertThat(told)
+                .containsExactly(Level.FILES_INTACT, Level.METADATA_VALID, Level.LINEAGE_FOLLOWS, Level.RECOMPUTED);
+
+        for (int reports = 1; reports < 40; reports += 3) {
+            StopAfter work = new StopAfter(reports);
+            Path into = Files.createDirectory(folder.resolve("stopped-" + reports));
+            Throwable stopping = org.assertj.core.api.Assertions.catchThrowable(() -> ExportBundle.exportChecked(
+                    small.archive(), List.of(root), ExportedOnce.settings("stopped"), into, false, work, level -> {}));
+            try (java.util.stream.Stream<Path> left = Files.list(into)) {
+                boolean stopped = stopping instanceof fringekeep.archive.problem.StoppedException;
+                assertThat(stopped || stopping == null)
+                        .as("after %d reports", reports)
+                        .isTrue();
+                assertThat(left.count()).as("stopped after %d reports", reports).isEqualTo(stopped ? 0 : 1);
+            }
+        }
+    }
+
+    /** Work that is stopped once it has reported so often. */
+    private static final class StopAfter implements Work {
+        private final int most;
+        private int reports;
+
+        StopAfter(int most) {
+            this.most = most;
+        }
+
+        @Override
+        public void progress(long done, long total, String what) {
+            reports++;
+        }
+
+        @Override
+        public boolean stopped() {
+            return reports >= most;
+        }
+    }
+
+    @Test
     void twoExportsHaveTheSameBytes() throws Exception {
         Path again = ExportedOnce.export(small, root, "readings", folder, false);
 
