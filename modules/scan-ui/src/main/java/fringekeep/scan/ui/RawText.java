@@ -42,7 +42,7 @@ final class RawText extends Painted implements Scrollable {
         revalidate();
         repaint();
         int first = columns.keySet().stream().findFirst().orElse(1);
-        scrollRectToVisible(new Rectangle(0, (first - 4) * LINE, 10, 8 * LINE));
+        scrollRectToVisible(new Rectangle(0, Math.max(0, first - 4) * LINE, 10, 8 * LINE));
     }
 
     /** Lines that are marked, for tests. */
