@@ -87,6 +87,22 @@ class CopyDamageTest {
         restored().close();
     }
 
+    /** The hardest byte: in the last line a line end in place of the space leaves a hash alone, as if withheld. */
+    @Test
+    void aLineBrokenInTwoIsNotTakenForAWithheldPart() throws Exception {
+        Path file = copy.resolve("records/000000.txt");
+        byte[] whole = Files.readAllBytes(file);
+        String text = new String(whole, StandardCharsets.ISO_8859_1);
+        int line = text.lastIndexOf('\n', text.length() - 2) + 1;
+        int space = text.indexOf(' ', line);
+        assertThat(space).isEqualTo(line + 64);
+        byte[] damaged = whole.clone();
+        damaged[space] = '\n';
+        Files.write(file, damaged);
+
+        found(file, whole, space, ' ' ^ '\n');
+    }
+
     private Archive restored() throws Exception {
         return Archives.restore(
                 copy, folder.resolve("restored"), OpenKind.all(), new Script().circumstances(), Work.QUIET);
