@@ -62,8 +62,10 @@ final class FieldOfProblem {
         }
         Role role = part.get().role();
         String label = kind.words().label(part.get().path());
-        String what = role.least() == 1 ? TEXTS.of("missing", label) : problem.what();
-        return new Problem(problem.code(), what, pointer + "/+" + role.name(), problem.mend());
+        boolean one = role.least() == 1;
+        String what = one ? TEXTS.of("missing", label) : problem.what();
+        String mend = one ? TEXTS.of("missing.mend") : problem.mend();
+        return new Problem(problem.code(), what, pointer + "/+" + role.name(), mend);
     }
 
     private static Optional<String> named(Problem problem) {
