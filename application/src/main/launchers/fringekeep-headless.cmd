@@ -1,14 +1,18 @@
 @echo off
 rem The headless program: plain Java over the program's own modules, without any jar of the window platform.
+rem Folders with an asterisk stand for the jars in them: a list of all jars would not fit into one variable.
 setlocal enabledelayedexpansion
 set "home=%~dp0.."
 set "java=java"
 if defined JAVA_HOME set "java=%JAVA_HOME%\bin\java"
-set "list=%TEMP%\fringekeep-headless-%RANDOM%.txt"
-set "path_="
-for /f "delims=" %%j in ('dir /s /b "%home%\fringekeep\modules\*.jar" ^| findstr /v /i "fringekeep-desk.jar fringekeep.desk"') do set "path_=!path_!;%%j"
-> "%list%" echo -cp "!path_:~1!"
-"%java%" -XX:+UseSerialGC -Djava.awt.headless=true @"%list%" fringekeep.commandline.Main %*
-set code=%errorlevel%
-del "%list%" 2>nul
-exit /b %code%
+set "jars=%home%\fringekeep\modules\*"
+for /d %%d in ("%home%\fringekeep\modules\ext\*") do (
+  if /i not "%%~nxd"=="fringekeep.desk" call :folder "%%d"
+)
+"%java%" -XX:+UseSerialGC -Djava.awt.headless=true -cp "!jars!" fringekeep.commandline.Main %*
+exit /b %errorlevel%
+
+:folder
+set "jars=!jars!;%~1\*"
+for /d /r "%~1" %%e in (*) do set "jars=!jars!;%%e\*"
+exit /b 0

@@ -23,16 +23,20 @@ class DesktopTest {
     private static final Path APPLICATION = Path.of(System.getProperty("application"));
     private static final Path SCREENSHOTS = Path.of(System.getProperty("screenshots"));
     private static final Path WORK = APPLICATION.resolveSibling("desktop-test");
-    private static final long MINUTES = 8;
+    private static final long MINUTES = 15;
 
     @TestFactory
     Stream<DynamicTest> theTestsInsideTheApplicationPass() throws IOException, InterruptedException {
         clear(WORK);
         Files.createDirectories(WORK.resolve("user/etc"));
         Path lab = invented();
-        List<String> results;
+        List<String> results = new ArrayList<>();
         try (VirtualDisplay display = VirtualDisplay.start(2600, 1500)) {
-            results = run(lab, display.name());
+            results.addAll(run(lab, display.name(), "usual", List.of()));
+        }
+        try (VirtualDisplay display = VirtualDisplay.start(5200, 3000)) {
+            List<String> twice = List.of("-J-Dsun.java2d.uiScale=2", "-J-Dfringekeep.uitest.only=Screens");
+            run(lab, display.name(), "twice", twice).forEach(line -> results.add(line.replaceFirst("\t", "\tat 200 %: ")));
         }
         List<DynamicTest> tests = new ArrayList<>();
         for (String line : results) {
@@ -56,15 +60,16 @@ class DesktopTest {
         return lab;
     }
 
-    private static List<String> run(Path lab, String display) throws IOException, InterruptedException {
-        Path results = WORK.resolve("results.tsv");
+    private static List<String> run(Path lab, String display, String name, List<String> more)
+            throws IOException, InterruptedException {
+        Path results = WORK.resolve(name + ".tsv");
         Path cluster = Path.of(System.getProperty("uitest.cluster")).normalize();
         assertThat(cluster).as("cluster of the tests inside the application").isDirectory();
         Files.writeString(
                 WORK.resolve("user/etc/fringekeep.conf"),
                 "extra_clusters=\"" + cluster + "\"\n",
                 StandardCharsets.UTF_8);
-        ProcessBuilder builder = new ProcessBuilder(
+        List<String> command = new ArrayList<>(List.of(
                 "sh",
                 APPLICATION.resolve("bin/fringekeep").toString(),
                 "--jdkhome",
@@ -76,9 +81,11 @@ class DesktopTest {
                 "--nosplash",
                 "-J-Dfringekeep.open=" + lab,
                 "-J-Dfringekeep.uitest.out=" + results,
-                "-J-Dfringekeep.uitest.pictures=" + SCREENSHOTS);
+                "-J-Dfringekeep.uitest.pictures=" + SCREENSHOTS));
+        command.addAll(more);
+        ProcessBuilder builder = new ProcessBuilder(command);
         builder.environment().put("DISPLAY", display);
-        await(builder, WORK.resolve("application.log"), "the application ends by itself");
+        await(builder, WORK.resolve(name + ".log"), "the application ends by itself");
         assertThat(results).as("results of the tests inside the application").exists();
         return Files.readAllLines(results, StandardCharsets.UTF_8);
     }

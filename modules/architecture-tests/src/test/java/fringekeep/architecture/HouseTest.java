@@ -72,6 +72,38 @@ class HouseTest {
                 }));
     }
 
+    /** Windows of a stage see what the stage itself may see, the stage, and the desk; the headless program sees no windows. */
+    @TestFactory
+    Stream<DynamicTest> windowsOfAStageUseOnlyItAndWhatStandsBeforeIt() {
+        return mayUse().entrySet().stream()
+                .filter(entry -> !entry.getKey().equals("desk"))
+                .map(entry -> DynamicTest.dynamicTest(entry.getKey() + " windows", () -> {
+                    List<String> forbidden = mayUse().keySet().stream()
+                            .filter(other -> !other.equals(entry.getKey()) && !other.equals("desk"))
+                            .filter(other -> !entry.getValue().contains(other))
+                            .map(other -> "fringekeep." + other + "..")
+                            .toList();
+                    noClasses()
+                            .that()
+                            .resideInAPackage("fringekeep." + entry.getKey() + ".ui..")
+                            .should()
+                            .dependOnClassesThat(resideInAnyPackage(forbidden.toArray(String[]::new)))
+                            .allowEmptyShould(true)
+                            .check(ALL);
+                }));
+    }
+
+    @Test
+    void noCoreKnowsWindows() {
+        noClasses()
+                .that()
+                .resideOutsideOfPackages("fringekeep.desk..", "fringekeep..ui..")
+                .should()
+                .dependOnClassesThat()
+                .resideInAnyPackage("fringekeep.desk..", "fringekeep..ui..")
+                .check(ALL);
+    }
+
     @Test
     void packagesFormNoCircles() {
         slices().matching("fringekeep.(**)").should().beFreeOfCycles().check(ALL);

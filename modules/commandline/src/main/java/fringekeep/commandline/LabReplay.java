@@ -36,7 +36,7 @@ import java.util.stream.IntStream;
  * Replays what the people of the invented laboratory entered. Clock and random source are scripted (record format 1, section
  * 13), so the same program makes the same journal on every machine.
  */
-final class LabReplay {
+public final class LabReplay {
     private static final String SEED = "fringekeep demo lab 1";
 
     private final Archive archive;
@@ -55,8 +55,9 @@ final class LabReplay {
     }
 
     /** The archive, open, and the raw files that were refused, as is meant by the mishaps. */
-    record Replayed(Archive archive, List<String> refused) {
-        Replayed {
+    public record Replayed(Archive archive, List<String> refused) {
+        /** Copies. */
+        public Replayed {
             refused = List.copyOf(refused);
         }
     }
@@ -87,7 +88,7 @@ final class LabReplay {
      * @param folder where the archive goes
      * @param build program version
      */
-    static Replayed replay(Path samples, Path folder, Kinds kinds, String build, Work work)
+    public static Replayed replay(Path samples, Path folder, Kinds kinds, String build, Work work)
             throws ProblemException, StoppedException {
         Path file = samples.resolve("lab").resolve("lab.json");
         JsonObject lab = object(Documents.read(file).value(), file);

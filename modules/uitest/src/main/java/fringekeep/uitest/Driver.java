@@ -20,6 +20,23 @@ import org.openide.windows.WindowManager;
 /** Runs the tests once the window is up, writes one line per test, and ends the application. */
 @SuppressWarnings("serial")
 public final class Driver extends ModuleInstall {
+    private static final long MOST_MILLISECONDS = 250;
+
+    /** In the order in which a person would do it; one line each. */
+    private static final List<Class<?>> TESTS = List.of(
+            WalkToRawCounts.class,
+            Screens.class,
+            FormsByHand.class,
+            AuditByHand.class,
+            FitByHand.class,
+            PropertyByHand.class,
+            FigureByHand.class,
+            TakeInByHand.class,
+            BundleByHand.class,
+            ListsAndViews.class,
+            Manners.class,
+            FirstStart.class);
+
     /** For the platform. */
     public Driver() {}
 
@@ -37,20 +54,38 @@ public final class Driver extends ModuleInstall {
         thread.start();
     }
 
+    /** All tests, or the one class that is asked for. */
+    private static List<Class<?>> chosen() {
+        String only = System.getProperty("fringekeep.uitest.only", "");
+        return TESTS.stream()
+                .filter(test -> only.isEmpty() || test.getSimpleName().equals(only))
+                .toList();
+    }
+
     private static void run(Path out) {
         StringBuilder lines = new StringBuilder();
         LauncherDiscoveryRequest request = LauncherDiscoveryRequestBuilder.request()
-                .selectors(DiscoverySelectors.selectClass(WalkToRawCounts.class))
+                .selectors(
+                        chosen().stream().map(DiscoverySelectors::selectClass).toList())
                 .build();
         LauncherFactory.create().execute(request, new TestExecutionListener() {
+            @Override
+            public void executionStarted(TestIdentifier test) {
+                if (test.isTest()) {
+                    BusyWatch.reset();
+                }
+            }
+
             @Override
             public void executionFinished(TestIdentifier test, TestExecutionResult result) {
                 if (test.isTest() || result.getStatus() != TestExecutionResult.Status.SUCCESSFUL) {
                     lines.append(line(test, result));
                 }
+                if (test.isTest()) {
+                    lines.append(busy(test));
+                }
             }
         });
-        lines.append("BUSY\t").append(BusyWatch.report()).append('\n');
         try {
             Files.writeString(out, lines.toString(), StandardCharsets.UTF_8);
         } catch (IOException e) {
@@ -58,6 +93,13 @@ public final class Driver extends ModuleInstall {
         } finally {
             LifecycleManager.getDefault().exit();
         }
+    }
+
+    /** How long the window thread was taken up at most; too long is a failure of its own. */
+    private static String busy(TestIdentifier test) {
+        boolean longer = BusyWatch.worstMilliseconds() > MOST_MILLISECONDS;
+        return (longer ? "BLOCKED" : "BUSY") + "\twindow thread in " + test.getDisplayName() + "\t"
+                + BusyWatch.report().replaceAll("\\s+", " ") + "\n";
     }
 
     private static String line(TestIdentifier test, TestExecutionResult result) {

@@ -175,10 +175,10 @@ final class VerdictRows extends Painted implements Scrollable {
     /** Left edges: record, what; right edges: kept, now, change; left edge: verdict. */
     private double[] columns() {
         double width = getWidth();
-        double verdict = Math.max(width * 0.72, width - 230);
-        double each = Math.min(110, (verdict - width * 0.38) / 3);
+        double verdict = Math.max(width * 0.74, width - 230);
+        double each = Math.min(110, (verdict - width * 0.42) / 3);
         double change = verdict - 30;
-        return new double[] {6, Math.min(180, width * 0.2), change - 2 * each, change - each, change, verdict};
+        return new double[] {6, Math.min(190, width * 0.23), change - 2 * each, change - each, change, verdict};
     }
 
     @Override
@@ -215,7 +215,9 @@ final class VerdictRows extends Painted implements Scrollable {
         double[] at = columns();
         double base = y + 15.0;
         pen.fitted(line.record(), on ? Type.BODY_MEDIUM : Type.BODY, Ink.INK, at[0], base, at[1] - 14);
-        pen.fitted(line.what(), Type.BODY, Ink.INK2, at[1], base, at[2] - at[1] - 70);
+        // words take the room of numbers that are not there
+        double what = line.kept().isEmpty() ? line.now().isEmpty() ? at[4] - 50 : at[3] - 70 : at[2] - 70;
+        pen.fitted(line.what(), Type.BODY, Ink.INK2, at[1], base, what - at[1]);
         pen.textEndingAt(line.kept(), Type.BODY, Ink.INK, at[2], base);
         pen.textEndingAt(line.now(), Type.BODY, Ink.INK, at[3], base);
         pen.textEndingAt(line.change(), Type.BODY, Ink.INK, at[4], base);
