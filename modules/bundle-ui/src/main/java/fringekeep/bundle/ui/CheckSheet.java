@@ -1,5 +1,6 @@
 package fringekeep.bundle.ui;
 
+import fringekeep.archive.Archive;
 import fringekeep.archive.kind.Kinds;
 import fringekeep.archive.problem.Problem;
 import fringekeep.archive.problem.ProblemException;
@@ -24,6 +25,7 @@ final class CheckSheet implements DeskSheet {
     private static final String PLACE = "bundle check";
 
     private final DeskHand hand;
+    private final Archive archive;
     private final Executor window;
     private final CheckPane pane;
     private Optional<Path> bundle = Optional.empty();
@@ -33,6 +35,7 @@ final class CheckSheet implements DeskSheet {
 
     CheckSheet(DeskHand hand, Executor window) {
         this.hand = hand;
+        this.archive = hand.archive();
         this.window = window;
         this.pane = new CheckPane(this::chooseFile, this::chooseFolder, this::again, this::stop);
         pane.levels(checks.lines());
@@ -73,7 +76,7 @@ final class CheckSheet implements DeskSheet {
         checks = Checks.ofCheck();
         pane.running(next.toString(), true);
         pane.levels(checks.lines());
-        Kinds kinds = hand.archive().kinds();
+        Kinds kinds = archive.kinds();
         hand.run(
                 PLACE,
                 work -> came(next, kinds, work),

@@ -1,5 +1,6 @@
 package fringekeep.bundle.ui;
 
+import fringekeep.archive.Archive;
 import fringekeep.archive.json.JsonObject;
 import fringekeep.archive.kind.RecordView;
 import fringekeep.archive.problem.Problem;
@@ -47,6 +48,7 @@ final class ExportSheet implements DeskSheet {
     private static final int QUIET = 500;
 
     private final DeskHand hand;
+    private final Archive archive;
     private final Executor window;
     private final List<Hash> roots;
     private final ExportPane pane;
@@ -58,6 +60,7 @@ final class ExportSheet implements DeskSheet {
     /** A sheet for records, usually a figure and its statements; at least one. */
     ExportSheet(DeskHand hand, Executor window, List<Hash> roots) {
         this.hand = hand;
+        this.archive = hand.archive();
         this.window = window;
         this.roots = List.copyOf(roots);
         saving.setRepeats(false);
@@ -78,11 +81,11 @@ final class ExportSheet implements DeskSheet {
                 work -> {
                     work.progress(0, 0, TEXTS.of("export.reading"));
                     BundleDraft fresh = fresh(person);
-                    Optional<JsonObject> kept = hand.archive().drafts().get(DRAFT);
-                    String root = hand.archive().label(roots.get(0));
+                    Optional<JsonObject> kept = archive.drafts().get(DRAFT);
+                    String root = archive.label(roots.get(0));
                     String words = roots.size() == 1 ? root : root + " +" + (roots.size() - 1);
                     return new Read(
-                            ExportBundle.shares(hand.archive(), roots),
+                            ExportBundle.shares(archive, roots),
                             words,
                             kept.map(json -> fresh.taking(json, roots.get(0).hex()))
                                     .orElse(fresh));
@@ -97,21 +100,20 @@ final class ExportSheet implements DeskSheet {
     /** What can be said without being asked. Asks the archive. */
     private BundleDraft fresh(Optional<String> person) {
         Hash root = roots.get(0);
-        String label = hand.archive().label(root);
-        String title = hand.archive()
-                .record(root)
-                .map((RecordView record) -> Names.title(hand.archive(), record).text())
+        String label = archive.label(root);
+        String title = archive.record(root)
+                .map((RecordView record) -> Names.title(archive, record).text())
                 .orElse("");
         String name = label.toLowerCase(Locale.ROOT).replaceAll("[^a-z0-9]+", "-");
-        String day = new Clock(hand.archive().facts()).date(Instant.now());
+        String day = new Clock(archive.facts()).date(Instant.now());
         return new BundleDraft(
                 name.length() > 60 ? name.substring(0, 60) : name,
                 title,
                 "",
                 day,
                 "CC-BY-4.0",
-                hand.archive().facts().title(),
-                hand.archive().facts().invented() ? "invented data" : "",
+                archive.facts().title(),
+                archive.facts().invented() ? "invented data" : "",
                 List.of(new Writer(person.orElse(""), "", "")),
                 hand.remembered("bundle folder").orElse(""),
                 false);
@@ -136,7 +138,7 @@ final class ExportSheet implements DeskSheet {
         hand.run(
                 "bundle draft",
                 work -> {
-                    hand.archive().drafts().save(DRAFT, body);
+                    archive.drafts().save(DRAFT, body);
                     return Boolean.TRUE;
                 },
                 saved -> {});
@@ -190,7 +192,7 @@ final class ExportSheet implements DeskSheet {
         });
         try {
             return new Came(
-                    Optional.of(ExportBundle.exportChecked(hand.archive(), roots, settings, parent, zip, told, levels)),
+                    Optional.of(ExportBundle.exportChecked(archive, roots, settings, parent, zip, told, levels)),
                     List.of());
         } catch (StoppedException e) {
             return new Came(Optional.empty(), List.of()); // the sheet says so

@@ -32,6 +32,7 @@ final class PlaceSheet implements DeskSheet {
     private static final String PLACING = "place";
 
     private final DeskHand hand;
+    private final Archive archive;
     private final PlaceModel model;
     private final PlacePane pane;
     private boolean running;
@@ -65,6 +66,7 @@ final class PlaceSheet implements DeskSheet {
     /** A sheet for at least one scan, in the order in which steps are counted. */
     PlaceSheet(DeskHand hand, List<Hash> scans) {
         this.hand = hand;
+        this.archive = hand.archive();
         this.model = new PlaceModel(scans);
         this.pane = new PlacePane(model, this::asked, this::place, this::stop);
         read();
@@ -75,7 +77,7 @@ final class PlaceSheet implements DeskSheet {
         hand.run(
                 "place offers",
                 work -> {
-                    PlaceOffers offers = new PlaceOffers(hand.archive());
+                    PlaceOffers offers = new PlaceOffers(archive);
                     PlaceOffers.Offered offered = offers.offer(model.scans());
                     PlaceModel.Choices choices = new PlaceModel.Choices(
                             offers.offers("setup"),
@@ -83,11 +85,11 @@ final class PlaceSheet implements DeskSheet {
                             offers.offers("series"),
                             offers.offers("batch"),
                             offered,
-                            offered.neighbour().map(hand.archive()::label).orElse(""),
+                            offered.neighbour().map(archive::label).orElse(""),
                             model.scans().stream().map(offers::placed).toList());
                     return new Read(
                             choices,
-                            lines(hand.archive(), model.scans()),
+                            lines(archive, model.scans()),
                             ofRun(offers, offered.run()),
                             offered.series().map(offers::steps).orElse(List.of()));
                 },
@@ -151,7 +153,7 @@ final class PlaceSheet implements DeskSheet {
         hand.run(
                 "place offers",
                 work -> {
-                    PlaceOffers offers = new PlaceOffers(hand.archive());
+                    PlaceOffers offers = new PlaceOffers(archive);
                     return new Read(
                             run,
                             ofRun(offers, run),
@@ -176,7 +178,7 @@ final class PlaceSheet implements DeskSheet {
         List<Place> places = model.places();
         hand.run(
                 "place foresee",
-                work -> consequence(new PlaceScans(hand.archive()).foresee(places)),
+                work -> consequence(new PlaceScans(archive).foresee(places)),
                 consequence -> pane.foreseen(Optional.of(consequence), running, said));
     }
 
@@ -185,8 +187,7 @@ final class PlaceSheet implements DeskSheet {
         foreseen.stream()
                 .flatMap(each -> each.outdated().stream())
                 .distinct()
-                .forEach(record -> hand.archive()
-                        .record(record)
+                .forEach(record -> archive.record(record)
                         .map(view -> Stops.label(view.head().kind().text()))
                         .ifPresent(kind -> kinds.merge(kind, 1, Integer::sum)));
         return new Consequence(foreseen.stream().map(Foreseen::effect).toList(), kinds);
@@ -205,7 +206,7 @@ final class PlaceSheet implements DeskSheet {
         pane.running(true);
         hand.run(
                 PLACING,
-                work -> new PlaceScans(hand.archive()).place(places, person, new Said(work)),
+                work -> new PlaceScans(archive).place(places, person, new Said(work)),
                 placed -> ended(placed.size(), places.size()),
                 this::failed);
     }

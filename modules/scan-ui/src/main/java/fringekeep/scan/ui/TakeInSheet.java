@@ -1,5 +1,6 @@
 package fringekeep.scan.ui;
 
+import fringekeep.archive.Archive;
 import fringekeep.archive.problem.Work;
 import fringekeep.archive.record.Hash;
 import fringekeep.archive.record.PersonId;
@@ -35,6 +36,7 @@ final class TakeInSheet implements DeskSheet {
     private static final String LOOKING = "take in look";
 
     private final DeskHand hand;
+    private final Archive archive;
     private final Executor window;
     private final Consumer<List<Hash>> place;
     private final TakeInModel model = new TakeInModel();
@@ -53,6 +55,7 @@ final class TakeInSheet implements DeskSheet {
      */
     TakeInSheet(DeskHand hand, Executor window, Consumer<List<Hash>> place) {
         this.hand = hand;
+        this.archive = hand.archive();
         this.window = window;
         this.place = place;
         this.pane = new TakeInPane(new Ear(), hand::save);
@@ -67,7 +70,7 @@ final class TakeInSheet implements DeskSheet {
         hand.run(
                 "take in profiles",
                 work -> {
-                    List<Hash> found = new TryFiles(hand.archive()).profiles();
+                    List<Hash> found = new TryFiles(archive).profiles();
                     return new Named(
                             found, found.stream().map(this::profileWords).toList());
                 },
@@ -83,12 +86,9 @@ final class TakeInSheet implements DeskSheet {
 
     /** {@code profile 2, counter 2}. Asks the archive. */
     private String profileWords(Hash profile) {
-        String label = hand.archive()
-                .label(profile)
-                .replace("reading-profile", "profile")
-                .replace("reading profile", "profile");
-        String words = hand.archive()
-                .record(profile)
+        String label =
+                archive.label(profile).replace("reading-profile", "profile").replace("reading profile", "profile");
+        String words = archive.record(profile)
                 .flatMap(record -> record.content().text("label"))
                 .orElse("");
         return words.isEmpty() ? label : words;
@@ -120,7 +120,7 @@ final class TakeInSheet implements DeskSheet {
     }
 
     private Boolean tryEach(List<Chosen> untried, Work work) {
-        TryFiles trial = new TryFiles(hand.archive());
+        TryFiles trial = new TryFiles(archive);
         for (int i = 0; i < untried.size() && !work.stopped(); i++) {
             work.progress(i, untried.size(), TEXTS.of("take-in.trying"));
             Chosen chosen = untried.get(i);
@@ -134,7 +134,7 @@ final class TakeInSheet implements DeskSheet {
     }
 
     private String scanWords(List<Hash> scans) {
-        List<String> labels = scans.stream().limit(3).map(hand.archive()::label).toList();
+        List<String> labels = scans.stream().limit(3).map(archive::label).toList();
         return String.join(", ", labels) + (scans.size() > 3 ? " \u2026" : "");
     }
 
@@ -176,7 +176,7 @@ final class TakeInSheet implements DeskSheet {
         FileLine line = model.line(row.get());
         hand.run(
                 LOOKING,
-                work -> new TryFiles(hand.archive()).look(line.file(), line.profile(), LINES_SHOWN),
+                work -> new TryFiles(archive).look(line.file(), line.profile(), LINES_SHOWN),
                 (Look look) -> pane.look(Optional.of(line), Optional.of(look), profiles.size()),
                 problems -> pane.look(Optional.of(line), Optional.empty(), profiles.size()));
     }
@@ -203,7 +203,7 @@ final class TakeInSheet implements DeskSheet {
         changed();
         hand.run(
                 TAKING,
-                work -> new TakeInFiles(hand.archive())
+                work -> new TakeInFiles(archive)
                         .takeEach(ready, times, Optional.of(person), new Said(work), outcome -> {
                             Taken taken = new Taken(outcome, scanWords(outcome.scans()));
                             window.execute(() -> taken(taken));
