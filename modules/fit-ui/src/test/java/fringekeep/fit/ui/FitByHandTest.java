@@ -27,6 +27,7 @@ import java.util.List;
 import java.util.Optional;
 import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
+import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 
@@ -36,11 +37,16 @@ class FitByHandTest {
 
     private static SmallLab lab;
 
-    private final QuietDesk desk = lab.desk();
+    private QuietDesk desk;
 
     @BeforeAll
     static void found() throws ProblemException {
         lab = new SmallLab(folder);
+    }
+
+    @BeforeEach
+    void sit() {
+        desk = lab.desk();
     }
 
     @AfterAll
@@ -247,14 +253,13 @@ class FitByHandTest {
         QuietDesk slow = new QuietDesk(lab.archive, SmallLab.PERSON, new Runner(waiting::add, Runnable::run));
         FitSheet sheet = new FitSheet(slow, List.of(lab.scan(750)));
         drain(waiting);
-        int tried = 0;
         for (int i = 1; i <= 50; i++) {
             double to = 4e-7 - i * 1e-9;
             sheet.fit().drag(plan -> plan.with("range.to", Optional.of(Json.of(to))));
         }
         assertThat(waiting).hasSize(1);
         assertThat(sheet.fit().settled()).isFalse();
-        tried = drain(waiting);
+        int tried = drain(waiting);
 
         assertThat(tried).isLessThanOrEqualTo(3);
         assertThat(trial(sheet).choices().object("range").orElseThrow().number("to"))

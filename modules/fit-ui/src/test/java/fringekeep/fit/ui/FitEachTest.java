@@ -26,7 +26,7 @@ class FitEachTest {
     /** Jobs that are stopped once so many fits are done; each takes two seconds of the clock. */
     private final class StoppingJobs implements Jobs {
         private final long after;
-        private FitEach told;
+        private java.util.Optional<FitEach> told = java.util.Optional.empty();
 
         StoppingJobs(long after) {
             this.after = after;
@@ -41,7 +41,9 @@ class FitEachTest {
                     public void progress(long now, long total, String what) {
                         tried.set(now);
                         clock.addAndGet(2_000_000_000L);
-                        left.add(told.left().map(Object::toString).orElse(""));
+                        left.add(told.flatMap(FitEach::left)
+                                .map(Object::toString)
+                                .orElse(""));
                     }
 
                     @Override
@@ -60,7 +62,7 @@ class FitEachTest {
     private FitEach each(SmallLab lab, long after) {
         StoppingJobs jobs = new StoppingJobs(after);
         FitEach each = new FitEach(lab.archive, jobs, clock::get, () -> {});
-        jobs.told = each;
+        jobs.told = java.util.Optional.of(each);
         return each;
     }
 

@@ -57,7 +57,8 @@ record Gathered(List<Line> lines, int taken, List<Quoted> quoted, String differe
      * @param reason code why it is left out; empty where it is taken
      * @param byHand whether a person left it out
      */
-    record Line(Hash fit, String label, String power, String visibility, double[] numbers, String reason, boolean byHand) {}
+    record Line(
+            Hash fit, String label, String power, String visibility, double[] numbers, String reason, boolean byHand) {}
 
     /**
      * A quoted value.
@@ -109,9 +110,7 @@ record Gathered(List<Line> lines, int taken, List<Quoted> quoted, String differe
                         each.visibility().value(), each.visibility().deviation()))
                 .orElse("\u2013");
         double[] numbers = {
-            fringe.flatMap(FringeFacet::power)
-                    .map(FringeFacet.Value::value)
-                    .orElse(Double.NaN),
+            fringe.flatMap(FringeFacet::power).map(FringeFacet.Value::value).orElse(Double.NaN),
             fringe.map(each -> each.visibility().value()).orElse(Double.NaN),
             fringe.map(each -> each.visibility().deviation()).orElse(Double.NaN)
         };
@@ -184,7 +183,8 @@ record Gathered(List<Line> lines, int taken, List<Quoted> quoted, String differe
     Picture picture() {
         List<Layer> layers = new ArrayList<>();
         layers.add(points(lines.stream().filter(line -> line.reason().isEmpty()).toList(), true));
-        List<Line> left = lines.stream().filter(line -> !line.reason().isEmpty()).toList();
+        List<Line> left =
+                lines.stream().filter(line -> !line.reason().isEmpty()).toList();
         if (!left.isEmpty()) {
             layers.add(points(left, false));
         }

@@ -26,6 +26,7 @@ import java.util.OptionalDouble;
 import java.util.Set;
 import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
+import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 
@@ -33,7 +34,7 @@ class PropertyByHandTest {
     private static PowerLab lab;
     private static List<Hash> fits;
 
-    private final QuietDesk desk = new QuietDesk(lab.archive, PowerLab.PERSON);
+    private QuietDesk desk;
 
     @BeforeAll
     static void found(@TempDir Path folder) throws Exception {
@@ -43,6 +44,11 @@ class PropertyByHandTest {
         for (PowerLab.Point point : series.points()) {
             fits.add(lab.fit(series, point, point.power() + " W"));
         }
+    }
+
+    @BeforeEach
+    void sit() {
+        desk = new QuietDesk(lab.archive, PowerLab.PERSON);
     }
 
     @AfterAll
