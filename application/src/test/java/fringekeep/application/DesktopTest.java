@@ -36,7 +36,8 @@ class DesktopTest {
         }
         try (VirtualDisplay display = VirtualDisplay.start(5200, 3000)) {
             List<String> twice = List.of("-J-Dsun.java2d.uiScale=2", "-J-Dfringekeep.uitest.only=Screens");
-            run(lab, display.name(), "twice", twice).forEach(line -> results.add(line.replaceFirst("\t", "\tat 200 %: ")));
+            run(lab, display.name(), "twice", twice)
+                    .forEach(line -> results.add(line.replaceFirst("\t", "\tat 200 %: ")));
         }
         List<DynamicTest> tests = new ArrayList<>();
         for (String line : results) {

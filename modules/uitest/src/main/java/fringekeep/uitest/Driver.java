@@ -1,6 +1,7 @@
 package fringekeep.uitest;
 
 import java.io.IOException;
+import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -83,15 +84,23 @@ public final class Driver extends ModuleInstall {
                 }
                 if (test.isTest()) {
                     lines.append(busy(test));
+                    write(out, lines);
                 }
             }
         });
         try {
-            Files.writeString(out, lines.toString(), StandardCharsets.UTF_8);
-        } catch (IOException e) {
-            throw new IllegalStateException("the results cannot be written", e);
+            write(out, lines);
         } finally {
             LifecycleManager.getDefault().exit();
+        }
+    }
+
+    /** After each test, so that what passed is known even of a run that is cut off. */
+    private static void write(Path out, StringBuilder lines) {
+        try {
+            Files.writeString(out, lines.toString(), StandardCharsets.UTF_8);
+        } catch (IOException e) {
+            throw new UncheckedIOException("the results cannot be written", e);
         }
     }
 

@@ -25,7 +25,7 @@ import org.openide.windows.WindowManager;
 
 /** A person at the window: presses keys, looks, waits until something is seen. */
 final class Person {
-    private static final long PATIENCE_SECONDS = 60;
+    private static final long PATIENCE_SECONDS = Long.getLong("fringekeep.uitest.patience", 60);
 
     private final Robot robot;
     private final Optional<Path> pictures = Optional.ofNullable(System.getProperty("fringekeep.uitest.pictures"))
@@ -202,7 +202,7 @@ final class Person {
         long end = System.nanoTime() + TimeUnit.SECONDS.toNanos(patience);
         while (!see(seen)) {
             if (System.nanoTime() > end) {
-                picture("waited-for");
+                picture("waited-for-" + what.replaceAll("[^A-Za-z0-9]+", "-"));
                 throw new AssertionError("not seen within " + patience + " s: " + what);
             }
             pause();
