@@ -1,5 +1,7 @@
 package fringekeep.uitest;
 
+import fringekeep.desk.window.Desk;
+import fringekeep.desk.window.Program;
 import java.io.IOException;
 import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
@@ -65,6 +67,10 @@ public final class Driver extends ModuleInstall {
 
     private static void run(Path out) {
         StringBuilder lines = new StringBuilder();
+        Person person = new Person();
+        Desk desk = person.see(() -> Program.only().desk());
+        person.waitForLong(
+                "the archive", () -> desk.recordPane().page().isPresent() && desk.quiet());
         LauncherDiscoveryRequest request = LauncherDiscoveryRequestBuilder.request()
                 .selectors(
                         chosen().stream().map(DiscoverySelectors::selectClass).toList())

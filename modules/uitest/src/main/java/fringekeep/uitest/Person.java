@@ -37,8 +37,7 @@ final class Person {
         } catch (AWTException e) {
             throw new IllegalStateException("no display to press keys on", e);
         }
-        robot.setAutoDelay(20);
-        robot.setAutoWaitForIdle(true);
+        robot.setAutoDelay(15);
     }
 
     Frame frame() {
@@ -48,6 +47,18 @@ final class Person {
     void press(int key) {
         robot.keyPress(key);
         robot.keyRelease(key);
+        settle();
+    }
+
+    /**
+     * Lets the window take in what was pressed. The robot's own waiting for an idle window never ends while a text cursor
+     * blinks.
+     */
+    private void settle() {
+        for (int i = 0; i < 2; i++) {
+            robot.delay(15);
+            see(() -> true);
+        }
     }
 
     void press(int modifier, int key) {
@@ -81,6 +92,7 @@ final class Person {
         robot.mouseMove(x, y);
         robot.mousePress(java.awt.event.InputEvent.BUTTON1_DOWN_MASK);
         robot.mouseRelease(java.awt.event.InputEvent.BUTTON1_DOWN_MASK);
+        settle();
     }
 
     /** Drags from one place within a component to another. */
@@ -92,6 +104,7 @@ final class Person {
             robot.mouseMove(corner.x + fromX + (toX - fromX) * i / 8, corner.y + fromY + (toY - fromY) * i / 8);
         }
         robot.mouseRelease(java.awt.event.InputEvent.BUTTON1_DOWN_MASK);
+        settle();
     }
 
     /** The component of that name in any window that is shown, if there is one in sight. */
@@ -164,7 +177,11 @@ final class Person {
     /** Answers who is at the desk when the program asks. */
     void sitDown() {
         Desk desk = see(() -> fringekeep.desk.window.Program.only().desk());
+        waitFor("the persons of the archive", desk::quiet);
         if (see(() -> desk.hand().personName().isEmpty())) {
+            if (find("person").isEmpty()) {
+                menu("menu.archive.person");
+            }
             named("person");
             write("A. Tester");
             press(KeyEvent.VK_ENTER);

@@ -5,11 +5,15 @@ import fringekeep.desk.look.Ink;
 import fringekeep.desk.look.Texts;
 import fringekeep.desk.look.Type;
 import fringekeep.desk.part.WordButton;
+import java.awt.Component;
 import java.awt.Dialog;
 import java.awt.GridBagConstraints;
 import java.awt.GridBagLayout;
 import java.awt.Insets;
+import java.awt.KeyboardFocusManager;
 import java.awt.Window;
+import java.awt.event.WindowAdapter;
+import java.awt.event.WindowEvent;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Consumer;
@@ -47,6 +51,7 @@ final class PersonSheet {
             }
         });
         dialog.add(form(names, press));
+        giveBack(dialog, owner);
         dialog.getRootPane()
                 .registerKeyboardAction(
                         event -> dialog.dispose(), KeyStroke.getKeyStroke("ESCAPE"), JComponent.WHEN_IN_FOCUSED_WINDOW);
@@ -55,6 +60,21 @@ final class PersonSheet {
         dialog.setLocationRelativeTo(owner);
         dialog.setVisible(true);
         names.getEditor().getEditorComponent().requestFocusInWindow();
+    }
+
+    /** What had the focus before gets it back, also where no window manager sees to that. */
+    static void giveBack(JDialog dialog, Window owner) {
+        Component before = KeyboardFocusManager.getCurrentKeyboardFocusManager().getFocusOwner();
+        dialog.addWindowListener(new WindowAdapter() {
+            @Override
+            public void windowClosed(WindowEvent event) {
+                owner.toFront();
+                owner.requestFocus();
+                if (before != null && before.isShowing()) {
+                    before.requestFocusInWindow();
+                }
+            }
+        });
     }
 
     private static JPanel form(JComboBox<String> names, WordButton press) {

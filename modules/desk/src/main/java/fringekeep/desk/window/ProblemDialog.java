@@ -47,6 +47,7 @@ final class ProblemDialog {
         foot.add(close);
         dialog.add(scroll, BorderLayout.CENTER);
         dialog.add(foot, BorderLayout.SOUTH);
+        PersonSheet.giveBack(dialog, owner);
         dialog.getRootPane().setDefaultButton(close);
         dialog.getRootPane()
                 .registerKeyboardAction(
