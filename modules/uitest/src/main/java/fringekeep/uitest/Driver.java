@@ -69,8 +69,7 @@ public final class Driver extends ModuleInstall {
         StringBuilder lines = new StringBuilder();
         Person person = new Person();
         Desk desk = person.see(() -> Program.only().desk());
-        person.waitForLong(
-                "the archive", () -> desk.recordPane().page().isPresent() && desk.quiet());
+        person.waitForLong("the archive", () -> desk.recordPane().page().isPresent() && desk.quiet());
         LauncherDiscoveryRequest request = LauncherDiscoveryRequestBuilder.request()
                 .selectors(
                         chosen().stream().map(DiscoverySelectors::selectClass).toList())

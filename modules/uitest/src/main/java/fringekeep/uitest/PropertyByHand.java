@@ -41,7 +41,7 @@ class PropertyByHand {
         person.waitFor(
                 "the list has the focus", () -> person.named("property.fits").isFocusOwner());
         person.press(KeyEvent.VK_DOWN);
-        person.click(person.named("property.leave"), 300, 10);
+        person.click(person.named("property.leave"), 268, 10);
         person.waitFor("the list again", desk::quiet);
         person.press(KeyEvent.VK_CONTROL, KeyEvent.VK_SPACE);
         person.waitForLong(

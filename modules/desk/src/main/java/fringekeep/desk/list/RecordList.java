@@ -67,6 +67,7 @@ public final class RecordList extends JPanel {
         table.getTableHeader().setReorderingAllowed(false);
         table.getTableHeader().setDefaultRenderer(new HeadPainter(() -> content));
         table.getAccessibleContext().setAccessibleName(TEXTS.of("list"));
+        getAccessibleContext().setAccessibleName(TEXTS.of("list"));
         scroll.setColumnHeaderView(table.getTableHeader());
         scroll.setHorizontalScrollBarPolicy(ScrollPaneConstants.HORIZONTAL_SCROLLBAR_NEVER);
         table.getSelectionModel().addListSelectionListener(event -> {

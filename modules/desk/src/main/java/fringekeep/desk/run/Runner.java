@@ -92,6 +92,7 @@ public final class Runner {
     private <T> void attempt(
             String place, Ticket ticket, Job<T> job, Consumer<T> done, Consumer<List<Problem>> failed) {
         if (ticket.stopped) {
+            window.execute(() -> end(place, ticket, () -> {})); // stopped before it began: it must not count as running
             return;
         }
         try {

@@ -92,6 +92,7 @@ public final class Desk extends JPanel {
     private transient Place place;
     private String doneWords = "";
     private int paneInSheet = 1;
+    private transient Optional<Hash> toOpen = Optional.empty();
     private transient List<Problem> trouble = List.of();
     private String card = "first";
     private String cardBeforeKeys = "first";
@@ -160,6 +161,7 @@ public final class Desk extends JPanel {
         });
         memory.get("list width").ifPresent(width -> panes.listWidth(width(width)));
         setBackground(Ink.SHEET.color());
+        getAccessibleContext().setAccessibleName("Fringekeep");
     }
 
     private static int width(String text) {
@@ -290,6 +292,7 @@ public final class Desk extends JPanel {
             list.focusRows();
         }
         sheet.ifPresent(DeskSheet::recorded);
+        toOpen.filter(one -> next.register().kind(one).isPresent()).ifPresent(this::open);
         if (first) {
             stages.all().forEach(stage -> stage.opened(hand));
         }
@@ -455,6 +458,11 @@ public final class Desk extends JPanel {
 
     /** Opens a record: its stop, its list, its pane. */
     void open(Hash next) {
+        if (register.isPresent() && register.get().kind(next).isEmpty()) {
+            toOpen = Optional.of(next); // recorded just now: the register is still being read
+            return;
+        }
+        toOpen = Optional.empty();
         remember();
         if (inView.filter(now -> !now.contains(next)).isPresent()) {
             view(View.ALL);

@@ -19,6 +19,8 @@ import fringekeep.desk.session.Stops;
 import fringekeep.desk.stage.InventedLab;
 import fringekeep.drawing.Picture;
 import fringekeep.drawing.PictureFiles;
+import java.awt.Component;
+import java.awt.KeyboardFocusManager;
 import java.awt.Window;
 import java.io.File;
 import java.io.IOException;
@@ -31,6 +33,7 @@ import java.util.function.Consumer;
 import java.util.function.Supplier;
 import javax.swing.JFileChooser;
 import javax.swing.SwingUtilities;
+import org.jspecify.annotations.Nullable;
 import org.openide.LifecycleManager;
 import org.openide.modules.Places;
 import org.openide.util.Lookup;
@@ -121,7 +124,7 @@ public final class Program implements DeskHost {
         JFileChooser chooser = new JFileChooser();
         chooser.setDialogTitle(TEXTS.of("open.title"));
         chooser.setFileSelectionMode(JFileChooser.DIRECTORIES_ONLY);
-        if (chooser.showOpenDialog(desk) == JFileChooser.APPROVE_OPTION) {
+        if (opened(chooser)) {
             openArchive(chooser.getSelectedFile().toPath());
         }
     }
@@ -189,7 +192,7 @@ public final class Program implements DeskHost {
         JFileChooser chooser = new JFileChooser();
         chooser.setDialogTitle(TEXTS.of("save.title"));
         chooser.setSelectedFile(new File("drawing.svg"));
-        if (chooser.showSaveDialog(desk) == JFileChooser.APPROVE_OPTION) {
+        if (saved(chooser)) {
             Path file = chooser.getSelectedFile().toPath();
             runner.run("save", work -> write(picture, file), done -> {}, this::trouble);
         }
@@ -199,16 +202,14 @@ public final class Program implements DeskHost {
     public List<Path> chooseFiles(String title) {
         JFileChooser chooser = chooser(title);
         chooser.setMultiSelectionEnabled(true);
-        return chooser.showOpenDialog(desk) == JFileChooser.APPROVE_OPTION
-                ? kept(List.of(chooser.getSelectedFiles()))
-                : List.of();
+        return opened(chooser) ? kept(List.of(chooser.getSelectedFiles())) : List.of();
     }
 
     @Override
     public Optional<Path> chooseFolder(String title) {
         JFileChooser chooser = chooser(title);
         chooser.setFileSelectionMode(JFileChooser.DIRECTORIES_ONLY);
-        return chooser.showOpenDialog(desk) == JFileChooser.APPROVE_OPTION
+        return opened(chooser)
                 ? kept(List.of(chooser.getSelectedFile())).stream().findFirst()
                 : Optional.empty();
     }
@@ -217,9 +218,33 @@ public final class Program implements DeskHost {
     public Optional<Path> chooseToSave(String title, String suggested) {
         JFileChooser chooser = chooser(title);
         chooser.setSelectedFile(new File(suggested));
-        return chooser.showSaveDialog(desk) == JFileChooser.APPROVE_OPTION
+        return saved(chooser)
                 ? kept(List.of(chooser.getSelectedFile())).stream().findFirst()
                 : Optional.empty();
+    }
+
+    private boolean opened(JFileChooser chooser) {
+        @Nullable Component before = focused();
+        return answered(chooser.showOpenDialog(desk), before);
+    }
+
+    private boolean saved(JFileChooser chooser) {
+        @Nullable Component before = focused();
+        return answered(chooser.showSaveDialog(desk), before);
+    }
+
+    private static @Nullable Component focused() {
+        return KeyboardFocusManager.getCurrentKeyboardFocusManager().getFocusOwner();
+    }
+
+    /** What had the focus gets it back, also where no window manager sees to that. */
+    private boolean answered(int answer, @Nullable Component before) {
+        window().toFront();
+        window().requestFocus();
+        if (before != null) {
+            before.requestFocusInWindow();
+        }
+        return answer == JFileChooser.APPROVE_OPTION;
     }
 
     private JFileChooser chooser(String title) {

@@ -8,16 +8,19 @@ import fringekeep.desk.look.Type;
 import java.awt.Component;
 import java.awt.Dimension;
 import java.awt.Graphics;
+import java.awt.event.ActionEvent;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
 import java.util.function.Consumer;
+import javax.swing.AbstractAction;
 import javax.swing.BorderFactory;
 import javax.swing.DefaultCellEditor;
 import javax.swing.JComboBox;
 import javax.swing.JScrollPane;
 import javax.swing.JTable;
 import javax.swing.JTextField;
+import javax.swing.KeyStroke;
 import javax.swing.ListSelectionModel;
 import javax.swing.ScrollPaneConstants;
 import javax.swing.table.AbstractTableModel;
@@ -154,8 +157,31 @@ final class FigureOutline extends JScrollPane {
             setSelectionMode(ListSelectionModel.SINGLE_SELECTION);
             setSurrendersFocusOnKeystroke(true);
             putClientProperty("terminateEditOnFocusLost", true);
+            getInputMap(WHEN_ANCESTOR_OF_FOCUSED_COMPONENT).put(KeyStroke.getKeyStroke("ENTER"), "type");
+            getActionMap().put("type", new AbstractAction() {
+                @Override
+                public void actionPerformed(ActionEvent event) {
+                    typeOrNext();
+                }
+            });
             getColumnModel().getColumn(0).setMaxWidth(190);
             getColumnModel().getColumn(0).setPreferredWidth(190);
+        }
+
+        /** Begins to type in the line; ends typing and goes to the next line that takes words. */
+        private void typeOrNext() {
+            int row = getSelectedRow();
+            if (isEditing()) {
+                getCellEditor().stopCellEditing();
+                for (int next = row + 1; next < lines.size(); next++) {
+                    if (!lines.get(next).head()) {
+                        changeSelection(next, 1, false, false);
+                        return;
+                    }
+                }
+            } else if (row >= 0 && editCellAt(row, 1)) {
+                getEditorComponent().requestFocusInWindow();
+            }
         }
 
         @Override

@@ -76,7 +76,7 @@ public final class FitStage implements DeskStage {
     public List<KeyLine> keys() {
         return List.of(
                 new KeyLine("", FitWords.TEXTS.of("key.fit")),
-                new KeyLine("\u2190 \u2192", FitWords.TEXTS.of("key.points")),
+                new KeyLine("left, right", FitWords.TEXTS.of("key.points")),
                 new KeyLine("M", FitWords.TEXTS.of("key.mask")),
                 new KeyLine("[ ]", FitWords.TEXTS.of("key.from")),
                 new KeyLine("\\", FitWords.TEXTS.of("key.whole")),

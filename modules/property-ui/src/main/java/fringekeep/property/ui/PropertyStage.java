@@ -81,7 +81,7 @@ public final class PropertyStage implements DeskStage {
     public List<KeyLine> keys() {
         return List.of(
                 new KeyLine("", PropertyWords.TEXTS.of("key.property")),
-                new KeyLine("\u2191 \u2193", PropertyWords.TEXTS.of("key.fits")),
+                new KeyLine("up, down", PropertyWords.TEXTS.of("key.fits")),
                 new KeyLine("Ctrl Space", PropertyWords.TEXTS.of("key.compute")),
                 new KeyLine("Ctrl Z, Ctrl Y", PropertyWords.TEXTS.of("key.undo")),
                 new KeyLine("Ctrl Enter", PropertyWords.TEXTS.of("key.record")));

@@ -99,7 +99,7 @@ public final class ScanStage implements DeskStage {
         return List.of(
                 new KeyLine("", TEXTS.of("keys.take-in")),
                 new KeyLine("Enter", TEXTS.of("keys.enter")),
-                new KeyLine("\u2190 \u2192", TEXTS.of("keys.profile")),
+                new KeyLine("left, right", TEXTS.of("keys.profile")),
                 new KeyLine("A  D", TEXTS.of("keys.add")),
                 new KeyLine("Delete", TEXTS.of("keys.delete")),
                 new KeyLine("F5", TEXTS.of("keys.again")),
