@@ -47,6 +47,16 @@ class RunnerTest {
     }
 
     @Test
+    void aJobStoppedBeforeItBeganDoesNotCountAsRunning() {
+        runner.run("list", work -> "list", answers::add);
+        runner.stop("list");
+        runAll();
+
+        assertThat(answers).isEmpty();
+        assertThat(runner.quiet()).isTrue();
+    }
+
+    @Test
     void differentPlacesDoNotDisturbEachOther() {
         runner.run("list", work -> "list", answers::add);
         runner.run("record", work -> "record", answers::add);
