@@ -86,7 +86,7 @@ final class FormReading {
     /** A new record, filled in as far as a document says. */
     Opened fresh(String name, JsonObject document) throws ProblemException {
         FormModel model = new FormModel(kind(name), clock.zone());
-        model.begin(document);
+        model.begin(named(document));
         return opened(model, TEXTS.of("title.new", model.kind().words().kindWords()), Optional.empty());
     }
 
@@ -196,6 +196,29 @@ final class FormReading {
         } catch (ProblemException e) {
             return record.hex(); // the label means several: the digits always say which
         }
+    }
+
+    /** The same document with records called what people call them, where it names them by their digits. */
+    private JsonObject named(JsonObject document) {
+        JsonObject named = document;
+        for (String list : List.of("about", "inputs")) {
+            if (document.get(list).isPresent()) {
+                List<Json> entries = document.array(list).objects().stream()
+                        .<Json>map(this::namedEntry)
+                        .toList();
+                named = named.with(list, new JsonArray(entries));
+            }
+        }
+        return named;
+    }
+
+    private JsonObject namedEntry(JsonObject entry) {
+        return entry.text("record")
+                .filter(text -> text.matches("[0-9a-f]{64}"))
+                .map(Hash::new)
+                .filter(record -> archive.record(record).isPresent())
+                .map(record -> entry.with("record", reference(record)))
+                .orElse(entry);
     }
 
     /** An entry document that would record another of the kind like this one. */

@@ -218,6 +218,7 @@ public final class Desk extends JPanel {
 
     /** Asks what an archive is founded with. */
     void askToFound() {
+        say(List.of());
         showCard("found");
         founding.focusFirst();
     }
