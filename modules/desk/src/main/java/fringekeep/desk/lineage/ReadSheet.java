@@ -122,7 +122,10 @@ public final class ReadSheet {
         Optional<RecordKind> kind = Names.kind(archive, at);
         times.put(record, time(at, kind, inputs));
         String whole = archive.label(record);
-        String label = main ? Names.number(whole, kindName) : whole;
+        // columns are narrow: no leading noughts behind a kind's name, no instant behind a continuation's number
+        String label = main
+                ? Names.shortNumber(whole, kindName, clock)
+                : Names.shortLabel(whole, clock).replaceFirst(" 0+(?=[0-9])", " ");
         return Optional.of(new Item(
                 record,
                 column.get(),
