@@ -122,7 +122,7 @@ public final class PropertyKind implements RecordKind {
             return Optional.of(facet.cast(PropertyFacets.estimates(record)));
         }
         if (facet == StatedUnits.class) {
-            return Optional.of(facet.cast(PropertyFacets.units()));
+            return Optional.of(facet.cast(new StatedUnits(PropertyFacets.units())));
         }
         if (facet == Plottable.class) {
             try {

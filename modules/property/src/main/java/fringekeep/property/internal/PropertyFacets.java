@@ -8,7 +8,6 @@ import fringekeep.archive.kind.RecordView;
 import fringekeep.archive.kind.Sensitivity;
 import fringekeep.archive.problem.ProblemException;
 import fringekeep.archive.record.Hash;
-import fringekeep.property.StatedUnits;
 import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.List;
@@ -22,12 +21,12 @@ public final class PropertyFacets {
 
     private PropertyFacets() {}
 
-    /** Units of every stated value, those in other units included. */
-    public static StatedUnits units() {
+    /** Unit of every stated value by its member, those in other units included. */
+    public static Map<String, String> units() {
         Map<String, String> units = new HashMap<>(UNITS);
         units.put("polarizability", "C.m2/V");
         units.put("polarizabilityAtomic", "1");
-        return new StatedUnits(units);
+        return Map.copyOf(units);
     }
 
     private static JsonObject stated(RecordView record) {
