@@ -5,6 +5,7 @@ import fringekeep.archive.record.Hash;
 import fringekeep.desk.look.Ink;
 import fringekeep.desk.look.Mark;
 import fringekeep.desk.part.FieldRow;
+import fringekeep.desk.part.SheetHead;
 import fringekeep.desk.part.WordButton;
 import fringekeep.desk.run.Job;
 import fringekeep.desk.stage.DeskHand;

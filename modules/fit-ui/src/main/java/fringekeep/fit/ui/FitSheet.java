@@ -5,6 +5,7 @@ import fringekeep.archive.problem.Problem;
 import fringekeep.archive.record.Hash;
 import fringekeep.desk.look.Mark;
 import fringekeep.desk.part.FieldRow;
+import fringekeep.desk.part.SheetHead;
 import fringekeep.desk.part.WordButton;
 import fringekeep.desk.part.WordChoice;
 import fringekeep.desk.part.WordChoice.Word;

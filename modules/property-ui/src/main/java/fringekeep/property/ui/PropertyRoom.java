@@ -1,6 +1,7 @@
 package fringekeep.property.ui;
 
 import fringekeep.desk.look.Ink;
+import fringekeep.desk.part.SheetHead;
 import fringekeep.desk.part.WordButton;
 import fringekeep.desk.part.WordChoice;
 import fringekeep.drawing.PictureView;

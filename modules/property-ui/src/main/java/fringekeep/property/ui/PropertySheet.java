@@ -5,6 +5,7 @@ import fringekeep.archive.problem.Problem;
 import fringekeep.archive.record.Hash;
 import fringekeep.desk.look.Ink;
 import fringekeep.desk.look.Mark;
+import fringekeep.desk.part.SheetHead;
 import fringekeep.desk.part.WordButton;
 import fringekeep.desk.part.WordChoice;
 import fringekeep.desk.part.WordChoice.Word;
@@ -35,7 +36,7 @@ final class PropertySheet implements DeskSheet {
 
     private final DeskHand desk;
     private final PropertyByHand property;
-    private final SheetHead head = new SheetHead();
+    private final SheetHead head = new SheetHead("property.head");
     private final FitsPanel fits = new FitsPanel(this::rowMoved);
     private final RulePanel rule;
     private final PropertyChoices choices;

@@ -1,4 +1,4 @@
-package fringekeep.property.ui;
+package fringekeep.desk.part;
 
 import fringekeep.desk.look.Ink;
 import fringekeep.desk.look.Mark;
@@ -9,21 +9,24 @@ import java.awt.Dimension;
 import java.awt.Graphics;
 import java.util.Optional;
 
-/** Title of the sheet, a sentence of what it is about, and a sentence of how it stands. */
+/** Title of a sheet, a sentence of what it is about, and a sentence of how it stands. */
 @SuppressWarnings("serial")
-final class SheetHead extends Painted {
-    static final int HEIGHT = 76;
+public final class SheetHead extends Painted {
+    /** Its height. */
+    public static final int HEIGHT = 76;
 
     private String title = "";
     private String about = "";
     private transient Optional<Mark> mark = Optional.empty();
     private String state = "";
 
-    SheetHead() {
-        setName("property.head");
+    /** An empty head with a name of its own. */
+    public SheetHead(String name) {
+        setName(name);
     }
 
-    void show(String heading, String sentence, Optional<Mark> shape, String stands) {
+    /** Shows title, what it is about, and how it stands with its shape. */
+    public void show(String heading, String sentence, Optional<Mark> shape, String stands) {
         title = heading;
         about = sentence;
         mark = shape;
@@ -33,7 +36,8 @@ final class SheetHead extends Painted {
         repaint();
     }
 
-    String state() {
+    /** How it stands. */
+    public String state() {
         return state;
     }
 
